@@ -1,0 +1,56 @@
+import { DAY_SECONDS } from "../bodies/constants.ts";
+import type { Pair } from "../bodies/pair.ts";
+import { POINTS } from "../bodies/point.ts";
+import type { Accuracy, AccuracyBasis } from "./source.ts";
+
+/**
+ * How far the built-in kernel may be from the truth about the Sun's centre (the Moon: about the Earth's).
+ *
+ * `seconds` is what passages differ by between kindred ephemerides: the larger of DE405 against DE200 and DE405 against
+ * an ephemeris made from DE431, where DE200 is the older by twenty years of data and, for the outer planets, set aside
+ * (it knew no Voyager ranging past Saturn); measured over 1960–2059. `acceleration`, km/d², is the typical range acceleration at those
+ * passages: their product is the range-rate error that passages inherit. `km` is the distance's own. These are bounds
+ * between kindred ephemerides, not samples of a law; the refit of the built-in kernel (up to 0.2 s, 5 m) lies inside.
+ */
+const ABOUT_SUN: Record<string, { seconds: number; acceleration: number; km: number }> = {
+  earth: { seconds: 1, acceleration: 740, km: 0.3 },
+  emb: { seconds: 0.6, acceleration: 740, km: 0.3 },
+  moon: { seconds: 2, acceleration: 1100, km: 0.02 },
+  mercury: { seconds: 0.3, acceleration: 60_000, km: 1 },
+  venus: { seconds: 0.3, acceleration: 574, km: 0.5 },
+  mars: { seconds: 0.5, acceleration: 1780, km: 1 },
+  jupiter: { seconds: 150, acceleration: 78, km: 30 },
+  saturn: { seconds: 470, acceleration: 27, km: 150 },
+  uranus: { seconds: 1500, acceleration: 5.5, km: 500 },
+  neptune: { seconds: 23_400, acceleration: 0.4, km: 3000 },
+  pluto: { seconds: 4_200, acceleration: 7, km: 3000 },
+};
+
+/**
+ * How far the solar-system barycentre itself may lie from where DE405 has it, km.
+ *
+ * The masses beyond Neptune were not in DE405; counting them moves the barycentre by about 100 km (R. S. Park et al.,
+ * *The JPL planetary and lunar ephemerides DE440 and DE441*, Astron. J. 161 (2021) 105; from memory). The line of sight turns once
+ * an orbit, so a fixed shift enters the range rate as shift × mean motion.
+ */
+const BARYCENTRE_SHIFT_KM = 150;
+
+/**
+ * Gives the accuracy of the built-in kernel.
+ *
+ * @param pair  any pair that the kernel supplies
+ * @param basis `measured` for the built-in kernel itself; what it is lent to says otherwise
+ * @returns half-widths of range (km) and range rate (km/s) that at least 95 % of true errors keep
+ */
+export function kernelAccuracy(pair: Pair, basis: AccuracyBasis): Accuracy {
+  const orbiter = pair.name.split("-")[0] ?? "";
+  const figures = ABOUT_SUN[orbiter] ?? { seconds: 60, acceleration: 1000, km: 100 };
+  const rate = (figures.seconds * figures.acceleration) / DAY_SECONDS ** 2;
+  if (pair.centre !== POINTS.ssb) return { rangeKm: figures.km, rangeRateKmS: rate, basis };
+  const meanMotion = Math.PI / pair.halfPeriodSeconds;
+  return {
+    rangeKm: Math.hypot(figures.km, BARYCENTRE_SHIFT_KM),
+    rangeRateKmS: Math.hypot(rate, BARYCENTRE_SHIFT_KM * meanMotion),
+    basis,
+  };
+}

@@ -1,0 +1,206 @@
+import type { Pair } from "../bodies/pair.ts";
+import { pointLabel } from "../bodies/point.ts";
+import { ApsidaryError } from "../error.ts";
+import type { Source, Span } from "../ephemeris/source.ts";
+import { type RangeFunction, rangeFunction } from "./range-function.ts";
+import { type Extremum, scanExtrema } from "./scan-extrema.ts";
+
+/** A source at work for a pair: its distance function and the stretch of time in which it may be evaluated. */
+export interface Supply {
+  readonly source: Source;
+  readonly range: RangeFunction;
+  readonly span: Span;
+}
+
+/** An extremum and who supplied it. */
+export interface SuppliedExtremum extends Extremum {
+  readonly supply: Supply;
+}
+
+/** A stretch of time in which one source is the best. */
+interface Piece {
+  readonly supply: Supply;
+  readonly from: number;
+  readonly to: number;
+}
+
+/** Which extrema of a piece are kept: those with `from ≤ t < until`, wherever they lie against the piece's own ends. */
+interface Kept {
+  readonly from: number;
+  readonly until: number;
+}
+
+/** The sources of a pair laid along time, the best one at each moment. */
+export interface Timeline {
+  readonly pair: Pair;
+  /** Stretches without a gap, in order. */
+  readonly covered: readonly Span[];
+  /** Gives the supply that is best at a time, `null` in a gap. */
+  supplyAt(tdb: number): Supply | null;
+  /**
+   * Gives the extrema one after the other within one covered stretch.
+   * @param from where to begin (inside `covered`); no extremum at or after it is missed, earlier ones may come first
+   * @returns a function that gives the next extremum, `null` at the end of the stretch
+   */
+  extremaFrom(from: number): () => SuppliedExtremum | null;
+}
+
+/**
+ * Lays the sources of a pair along time.
+ *
+ * Where two sources meet, their instants differ (the engine by hours), so a cut by time alone would lose a passage that
+ * each puts on the other's side, or give it twice. Instead the better source's first extremum past the seam is paired
+ * with the other source's nearest of the same kind, beyond the seam if need be; the other source's list ends (or
+ * begins) next to that one. So a passage that both know comes from the better source, one that only the other source
+ * puts in reach is kept, and kinds go on alternating.
+ *
+ * @param pair    the pair
+ * @param sources the sources, the best first
+ * @throws ApsidaryError `not-supplied` where none supplies the pair
+ */
+export function timelineOf(pair: Pair, sources: readonly Source[]): Timeline {
+  const all = sources.flatMap((source) =>
+    source.spans(pair).map((span): Supply => {
+      const range = rangeFunction(source.motion(pair), `${source.title}, ${pair.name},`);
+      return { source, range, span };
+    }),
+  );
+  // A supply too short to hold an extremum cannot be paired at its seams; where another one covers it, that one serves.
+  const supplies = all.filter((supply) => holdsExtremum(supply, pair) || !all.some((other) => reachesPast(other, supply)));
+  if (supplies.length === 0) {
+    const asked = sources.length === 1 ? (sources[0] as Source).title : "no source that is open";
+    throw new ApsidaryError(
+      "not-supplied",
+      `${asked} ${sources.length === 1 ? "does not supply" : "supplies"} ${pair.name} ` +
+        `(${pointLabel(pair.target)} about ${pointLabel(pair.centre)}). Open a kernel that has both points, or another source.`,
+    );
+  }
+  const pieces = piecesOf(supplies);
+  const covered = coveredBy(pieces);
+  const kept = new Map<number, Kept>(); // worked out when a piece is first used
+
+  const keptOf = (index: number): Kept => {
+    let known = kept.get(index);
+    if (!known) {
+      known = { from: seam(pair, pieces, index - 1).rightFrom, until: seam(pair, pieces, index).leftUntil };
+      kept.set(index, known);
+    }
+    return known;
+  };
+
+  return {
+    pair,
+    covered,
+    supplyAt: (tdb) => pieces.find((piece) => tdb >= piece.from && tdb <= piece.to)?.supply ?? null,
+    extremaFrom(from) {
+      let index = pieces.findIndex((piece) => from <= piece.to);
+      // A passage just after `from` may belong to the piece before it, whose source puts it past the seam.
+      if (index > 0 && joined(pieces, index - 1)) index--;
+      let scan: (() => Extremum | null) | null = null;
+      return () => {
+        for (; index >= 0 && index < pieces.length; index++, scan = null) {
+          const { supply } = pieces[index] as Piece;
+          const keep = keptOf(index);
+          if (keep.until > from) {
+            scan ??= scanExtrema(supply.range, supply.span, pair.sampleSeconds, Math.max(from, keep.from));
+            for (let found = scan(); found && found.tdb < keep.until; found = scan()) {
+              if (found.tdb >= keep.from) return { kind: found.kind, tdb: found.tdb, supply };
+            }
+          }
+          if (!joined(pieces, index)) return null;
+        }
+        return null;
+      };
+    },
+  };
+}
+
+/** Cuts time at all ends of spans and gives each stretch to the first supply that covers it. */
+function piecesOf(supplies: readonly Supply[]): Piece[] {
+  const cuts = [...new Set(supplies.flatMap(({ span }) => [span.from, span.to]))].sort((a, b) => a - b);
+  const pieces: Piece[] = [];
+  for (let i = 0; i + 1 < cuts.length; i++) {
+    const from = cuts[i] as number;
+    const to = cuts[i + 1] as number;
+    const supply = supplies.find(({ span }) => span.from <= from && to <= span.to);
+    if (!supply) continue;
+    const last = pieces.at(-1);
+    if (last?.supply === supply && last.to === from) pieces[pieces.length - 1] = { supply, from: last.from, to };
+    else pieces.push({ supply, from, to });
+  }
+  return pieces;
+}
+
+function joined(pieces: readonly Piece[], index: number): boolean {
+  const left = pieces[index];
+  const right = pieces[index + 1];
+  return left !== undefined && right !== undefined && left.to === right.from;
+}
+
+function coveredBy(pieces: readonly Piece[]): Span[] {
+  const covered: { from: number; to: number }[] = [];
+  pieces.forEach((piece, index) => {
+    if (joined(pieces, index - 1)) (covered.at(-1) as { to: number }).to = piece.to;
+    else covered.push({ from: piece.from, to: piece.to });
+  });
+  return covered;
+}
+
+/**
+ * Tells how the lists of two neighbouring pieces join: the left one gives its extrema before `leftUntil`, the right one
+ * those from `rightFrom` on.
+ */
+function seam(pair: Pair, pieces: readonly Piece[], index: number): { leftUntil: number; rightFrom: number } {
+  const left = pieces[index];
+  const right = pieces[index + 1];
+  if (!left || !right || left.to !== right.from) return { leftUntil: Infinity, rightFrom: -Infinity };
+  const at = right.from;
+  if (left.supply.span.to > at) {
+    // The left source could have gone on: the right one is better and begins here.
+    const first = firstIn(right, pair);
+    const twin = first && nearestOfKind(left.supply, pair, first);
+    return { leftUntil: twin ?? at, rightFrom: at };
+  }
+  const last = lastIn(left, pair);
+  const twin = last && nearestOfKind(right.supply, pair, last);
+  return { leftUntil: at, rightFrom: twin === null ? at : twin + RESOLUTION };
+}
+
+/** Seconds by which an instant is passed to leave it out; numbers of this size resolve 10⁻⁶ s. */
+const RESOLUTION = 1e-5;
+
+function holdsExtremum(supply: Supply, pair: Pair): boolean {
+  return scanExtrema(supply.range, supply.span, pair.sampleSeconds, supply.span.from)() !== null;
+}
+
+function reachesPast(other: Supply, supply: Supply): boolean {
+  return other !== supply && other.span.from <= supply.span.from && other.span.to >= supply.span.to;
+}
+
+function firstIn(piece: Piece, pair: Pair): Extremum | null {
+  const next = scanExtrema(piece.supply.range, piece.supply.span, pair.sampleSeconds, piece.from);
+  for (let found = next(); found && found.tdb <= piece.to; found = next()) if (found.tdb >= piece.from) return found;
+  return null;
+}
+
+/** Searches in growing stretches before the piece's end, so that a long piece is not scanned whole for its last extremum. */
+function lastIn(piece: Piece, pair: Pair): Extremum | null {
+  for (let reach = pair.halfPeriodSeconds; ; reach *= 2) {
+    const from = Math.max(piece.from, piece.to - reach);
+    const next = scanExtrema(piece.supply.range, piece.supply.span, pair.sampleSeconds, from);
+    let last: Extremum | null = null;
+    for (let found = next(); found && found.tdb < piece.to; found = next()) if (found.tdb >= from) last = found;
+    if (last || from === piece.from) return last;
+  }
+}
+
+/** The instant of a supply's extremum of the same kind nearest to another source's, within half a period; `null` where there is none. */
+function nearestOfKind(supply: Supply, pair: Pair, twin: Extremum): number | null {
+  const next = scanExtrema(supply.range, supply.span, pair.sampleSeconds, twin.tdb - pair.halfPeriodSeconds);
+  let nearest: number | null = null;
+  for (let found = next(); found && found.tdb <= twin.tdb + pair.halfPeriodSeconds; found = next()) {
+    if (found.kind !== twin.kind) continue;
+    if (nearest === null || Math.abs(found.tdb - twin.tdb) < Math.abs(nearest - twin.tdb)) nearest = found.tdb;
+  }
+  return nearest;
+}
