@@ -3,7 +3,8 @@ import type { ApsisKind } from "../bodies/term.ts";
 import type { Ephemeris } from "../ephemeris/open-sources.ts";
 import { type Moment, tdbOf } from "../time/tdb-of.ts";
 import type { Passage } from "./passage.ts";
-import { type SourceChoice, passages, timelineFor } from "./passages.ts";
+import { passages } from "./passages.ts";
+import { type SourceChoice, timelineFor } from "./timeline-for.ts";
 
 /** What to look for besides the kind. */
 export interface NeighbourOptions {

@@ -35,6 +35,8 @@ export interface Timeline {
   readonly pair: Pair;
   /** Stretches without a gap, in order. */
   readonly covered: readonly Span[];
+  /** All supplies, the best first. */
+  readonly supplies: readonly Supply[];
   /** Gives the supply that is best at a time, `null` in a gap. */
   supplyAt(tdb: number): Supply | null;
   /**
@@ -91,6 +93,7 @@ export function timelineOf(pair: Pair, sources: readonly Source[]): Timeline {
   return {
     pair,
     covered,
+    supplies,
     supplyAt: (tdb) => pieces.find((piece) => tdb >= piece.from && tdb <= piece.to)?.supply ?? null,
     extremaFrom(from) {
       let index = pieces.findIndex((piece) => from <= piece.to);

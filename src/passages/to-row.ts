@@ -1,0 +1,80 @@
+import { AU_KM } from "../bodies/constants.ts";
+import { type PairName, pairOf } from "../bodies/pair.ts";
+import { type ApsisKind, type ApsisRank, termOf } from "../bodies/term.ts";
+import type { AccuracyBasis } from "../ephemeris/source.ts";
+import { formatTdb } from "../time/format-tdb.ts";
+import { formatUtc } from "../time/format-utc.ts";
+import type { LeapSecondList } from "../time/leap-seconds.ts";
+import { type UtcBasis, utcOf } from "../time/utc-of.ts";
+import type { Passage } from "./passage.ts";
+
+/** A passage as it is given out: with its words, its civil time and both units of distance. Numbers are rounded to 1 ms, 1 m, 1e-12 au. */
+export interface PassageRow {
+  readonly pair: PairName;
+  /** SPK id of the moving point. */
+  readonly targetPoint: number;
+  /** SPK id of the centre. */
+  readonly centrePoint: number;
+  readonly kind: ApsisKind;
+  readonly term: string;
+  readonly rank: ApsisRank;
+  readonly existence: "certain" | "uncertain";
+  readonly tdbSeconds: number;
+  readonly tdb: string;
+  /** ISO 8601; UT1 where the basis is `delta-t`. */
+  readonly utc: string;
+  readonly utcBasis: UtcBasis;
+  readonly distanceKm: number;
+  readonly distanceAu: number;
+  /** Of `tdbSeconds`: what at least 95 % of such passages keep. */
+  readonly timeUncertaintySeconds: number;
+  readonly distanceUncertaintyKm: number;
+  /** With the time scale's own added, as the root of the sum of squares. */
+  readonly utcUncertaintySeconds: number;
+  readonly rangeAccelerationKmPerDay2: number;
+  readonly source: string;
+  readonly accuracyBasis: AccuracyBasis;
+}
+
+/**
+ * Gives the row of a passage.
+ *
+ * @param passage the passage
+ * @param scales  the leap-second list by which UTC is told: an `Ephemeris` will do; left out, the built-in list
+ */
+export function toRow(passage: Passage, scales?: { readonly leapSeconds: LeapSecondList }): PassageRow {
+  const pair = pairOf(passage.pair);
+  const { kind, rank, tdbSeconds, distanceKm } = passage;
+  const utc = utcOf(tdbSeconds, scales?.leapSeconds);
+  return Object.freeze({
+    pair: pair.name,
+    targetPoint: pair.target,
+    centrePoint: pair.centre,
+    kind,
+    term: termOf(pair, kind, rank),
+    rank,
+    existence: passage.existence,
+    tdbSeconds: rounded(tdbSeconds, 1e3),
+    tdb: formatTdb(tdbSeconds, 3),
+    utc: formatUtc(utc, 3),
+    utcBasis: utc.basis,
+    distanceKm: rounded(distanceKm, 1e3),
+    distanceAu: rounded(distanceKm / AU_KM, 1e12),
+    timeUncertaintySeconds: roundedUp(passage.timeUncertaintySeconds),
+    distanceUncertaintyKm: roundedUp(passage.distanceUncertaintyKm),
+    utcUncertaintySeconds: roundedUp(Math.hypot(passage.timeUncertaintySeconds, utc.uncertaintySeconds)),
+    rangeAccelerationKmPerDay2: rounded(passage.rangeAccelerationKmPerDay2, 1e3),
+    source: passage.source,
+    accuracyBasis: passage.accuracyBasis,
+  });
+}
+
+/** To `1 / parts`; the division by a whole number gives the double nearest to the decimal. */
+function rounded(value: number, parts: number): number {
+  return Math.round(value * parts) / parts;
+}
+
+/** A half-width is never rounded to less than it is. */
+function roundedUp(value: number): number {
+  return Math.ceil(value * 1e3) / 1e3;
+}
