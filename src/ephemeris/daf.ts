@@ -37,10 +37,14 @@ export function readDaf(bytes: Uint8Array, name: string): Daf {
   const fail = (what: string) => new ApsidaryError("bad-kernel", `${name} ${what}`);
   const idWord = latin(bytes, 0, 8);
   if (!idWord.startsWith("DAF/") && !idWord.startsWith("NAIF/DAF")) {
-    throw fail(`is not a DAF: it begins with ${JSON.stringify(idWord)}, a kernel begins with "DAF/SPK". Give an SPK file.`);
+    throw fail(
+      `is not a DAF: it begins with ${JSON.stringify(idWord)}, a kernel begins with "DAF/SPK". Give an SPK file.`,
+    );
   }
   if (bytes.length < RECORD_BYTES) {
-    throw fail(`is cut short: ${bytes.length} bytes, and the first record alone has ${RECORD_BYTES}. Fetch the file again.`);
+    throw fail(
+      `is cut short: ${bytes.length} bytes, and the first record alone has ${RECORD_BYTES}. Fetch the file again.`,
+    );
   }
   checkTransfer(bytes, fail);
   const view = new DataView(bytes.buffer, bytes.byteOffset, bytes.byteLength);
@@ -74,7 +78,9 @@ function checkTransfer(bytes: Uint8Array, fail: Fail): void {
   const record = latin(bytes, 0, RECORD_BYTES);
   const start = record.indexOf("FTPSTR");
   if (start >= 0 && !record.startsWith(TRANSFER_CHECK, start)) {
-    throw fail("was changed by a text-mode transfer (its check characters are altered). Fetch it again in binary mode.");
+    throw fail(
+      "was changed by a text-mode transfer (its check characters are altered). Fetch it again in binary mode.",
+    );
   }
 }
 
@@ -124,7 +130,9 @@ function readSummaries(
   for (let record = firstRecord; record !== 0; ) {
     const start = (record - 1) * RECORD_BYTES;
     if (!Number.isInteger(record) || record < 2 || start + 2 * RECORD_BYTES > bytes.length) {
-      throw fail(`is cut short or damaged: summary record ${record} lies outside its ${bytes.length} bytes. Fetch it again.`);
+      throw fail(
+        `is cut short or damaged: summary record ${record} lies outside its ${bytes.length} bytes. Fetch it again.`,
+      );
     }
     if (seen.has(record)) throw fail(`is damaged: its summary records form a ring at record ${record}.`);
     seen.add(record);

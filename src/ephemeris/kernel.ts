@@ -2,7 +2,7 @@ import type { Pair } from "../bodies/pair.ts";
 import { type PointId, pointLabel } from "../bodies/point.ts";
 import { ApsidaryError } from "../error.ts";
 import type { Accuracy, Motion, Source, Span } from "./source.ts";
-import { type SpkSegment, addSegmentState, readSpk } from "./spk.ts";
+import { addSegmentState, readSpk, type SpkSegment } from "./spk.ts";
 
 /** Segments of one target about one centre, the one that counts most first. */
 interface Link {

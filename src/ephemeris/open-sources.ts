@@ -1,6 +1,6 @@
 import { type Pair, type PairName, pairOf } from "../bodies/pair.ts";
 import { ApsidaryError } from "../error.ts";
-import { type LeapSecondList, builtInLeapSeconds, parseLeapSeconds } from "../time/leap-seconds.ts";
+import { builtInLeapSeconds, type LeapSecondList, parseLeapSeconds } from "../time/leap-seconds.ts";
 import { openBuiltInKernel } from "./builtin.ts";
 import { openEngine } from "./engine.ts";
 import type { Source, Span } from "./source.ts";
@@ -62,11 +62,14 @@ export async function openSources(options: SourceOptions = {}): Promise<Ephemeri
   const leapSeconds = options.leapSeconds === undefined ? builtInLeapSeconds() : parseLeapSeconds(options.leapSeconds);
   const [users, own, net] = await Promise.all([
     Promise.all(kernels.map((given, index) => openUserKernel(given, index, signal))),
-    builtIn === false ? [] : openBuiltInKernel(builtIn === true ? undefined : builtIn, signal).then((source) => [source]),
+    builtIn === false
+      ? []
+      : openBuiltInKernel(builtIn === true ? undefined : builtIn, signal).then((source) => [source]),
     engine ? openEngine().then((source) => [source]) : [],
   ]);
   const sources = Object.freeze([...(options.tracks ?? []), ...users.reverse(), ...own, ...net]);
-  if (sources.length === 0) throw new ApsidaryError("bad-option", "no source is open; leave out `builtIn: false` or give a kernel.");
+  if (sources.length === 0)
+    throw new ApsidaryError("bad-option", "no source is open; leave out `builtIn: false` or give a kernel.");
   return Object.freeze({
     sources,
     leapSeconds,

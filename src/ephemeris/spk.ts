@@ -1,6 +1,6 @@
-import { addChebyshev } from "../numeric/chebyshev.ts";
 import { pointLabel } from "../bodies/point.ts";
 import { ApsidaryError } from "../error.ts";
+import { addChebyshev } from "../numeric/chebyshev.ts";
 import { type Daf, readDaf } from "./daf.ts";
 
 /** One segment of an SPK file: the motion of a target about a centre over a span, in Chebyshev records of equal length. */
@@ -51,7 +51,10 @@ const FRAME_J2000 = 1;
 export function readSpk(bytes: Uint8Array, name: string): Spk {
   const daf = readDaf(bytes, name);
   if (daf.idWord !== "DAF/SPK" && daf.idWord !== "NAIF/DAF") {
-    throw new ApsidaryError("bad-kernel", `${name} is a DAF but no SPK: its kind is ${daf.idWord}. Give a file of kind DAF/SPK.`);
+    throw new ApsidaryError(
+      "bad-kernel",
+      `${name} is a DAF but no SPK: its kind is ${daf.idWord}. Give a file of kind DAF/SPK.`,
+    );
   }
   const segments = daf.summaries.map((_, index) => readSegment(daf, index, name));
   if (segments.length === 0) throw new ApsidaryError("bad-kernel", `${name} holds no segment. Fetch the file again.`);
@@ -68,9 +71,14 @@ function readSegment(daf: Daf, index: number, file: string): SpkSegment {
   if (type !== 2 && type !== 3) throw fail(`is of type ${type}; types 2 and 3 are read. Leave it out of the file.`);
   if (frame !== FRAME_J2000) throw fail(`is in frame ${frame}; frame 1 (J2000/ICRF) is read.`);
   if (first < 1 || last < first + 4 || last > daf.words.length) {
-    throw fail(`is cut short: it needs words ${first} to ${last}, the file has ${daf.words.length}. Fetch the file again.`);
+    throw fail(
+      `is cut short: it needs words ${first} to ${last}, the file has ${daf.words.length}. Fetch the file again.`,
+    );
   }
-  const [firstStart = Number.NaN, recordSeconds = Number.NaN, recordWords = 0, records = 0] = daf.words.subarray(last - 4, last);
+  const [firstStart = Number.NaN, recordSeconds = Number.NaN, recordWords = 0, records = 0] = daf.words.subarray(
+    last - 4,
+    last,
+  );
   const series = type === 2 ? 3 : 6;
   const coefficients = (recordWords - 2) / series;
   if (
@@ -81,7 +89,9 @@ function readSegment(daf: Daf, index: number, file: string): SpkSegment {
     coefficients < 1 ||
     records * recordWords + 4 !== last - first + 1
   ) {
-    throw fail(`claims ${records} records of ${recordWords} words and ${recordSeconds} s, which do not fit its ${last - first + 1} words.`);
+    throw fail(
+      `claims ${records} records of ${recordWords} words and ${recordSeconds} s, which do not fit its ${last - first + 1} words.`,
+    );
   }
   const slack = 1e-3 * recordSeconds;
   if (!(from < to) || from < firstStart - slack || to > firstStart + records * recordSeconds + slack) {
@@ -113,7 +123,13 @@ function readSegment(daf: Daf, index: number, file: string): SpkSegment {
  * @param order   0: position; 1: and velocity; 2: and acceleration
  * @param out     x, y, z (km), their rates (km/s), their second derivatives (km/s²); `3·(order + 1)` places are added to
  */
-export function addSegmentState(segment: SpkSegment, tdb: number, sign: number, order: number, out: Float64Array): void {
+export function addSegmentState(
+  segment: SpkSegment,
+  tdb: number,
+  sign: number,
+  order: number,
+  out: Float64Array,
+): void {
   const { words, coefficients: n } = segment;
   let record = Math.floor((tdb - segment.firstStart) / segment.recordSeconds);
   if (record < 0) record = 0;

@@ -49,7 +49,10 @@ async function bytesOf(data: Uint8Array | URL | Blob, title: string, signal?: Ab
     return await readBytes(data, signal);
   } catch (error) {
     if (signal?.aborted) throw error;
-    throw new ApsidaryError("unreadable", `${title} cannot be read (${error instanceof Error ? error.message : String(error)}).`);
+    throw new ApsidaryError(
+      "unreadable",
+      `${title} cannot be read (${error instanceof Error ? error.message : String(error)}).`,
+    );
   }
 }
 

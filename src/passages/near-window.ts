@@ -36,7 +36,10 @@ const TOLERANCE_SECONDS = 0.01;
 export function nearWindow(ephemeris: Ephemeris, passage: Passage, nearness: Nearness): NearWindow {
   const km = "km" in nearness ? nearness.km : (passage.distanceKm * nearness.percent) / 100;
   if (!(km > 0) || !Number.isFinite(km)) {
-    throw new ApsidaryError("bad-option", `the nearness must be above zero: { km: 500 } or { percent: 1 }, not ${JSON.stringify(nearness)}.`);
+    throw new ApsidaryError(
+      "bad-option",
+      `the nearness must be above zero: { km: 500 } or { percent: 1 }, not ${JSON.stringify(nearness)}.`,
+    );
   }
   const outward = passage.kind === "periapsis" ? 1 : -1;
   const limitKm = passage.distanceKm + outward * km;
@@ -45,7 +48,11 @@ export function nearWindow(ephemeris: Ephemeris, passage: Passage, nearness: Nea
   const supplyOf = (tdb: number) => {
     const own = timeline.supplyAt(tdb);
     if (own?.source.id === passage.source) return own;
-    return timeline.supplies.find(({ source, span }) => source.id === passage.source && span.from <= tdb && tdb <= span.to) ?? own;
+    return (
+      timeline.supplies.find(
+        ({ source, span }) => source.id === passage.source && span.from <= tdb && tdb <= span.to,
+      ) ?? own
+    );
   };
   const edge = (side: 1 | -1): number | null => {
     const step = (side * pair.sampleSeconds) / 4;

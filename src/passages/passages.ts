@@ -37,7 +37,11 @@ export interface PassageQuery {
  * half-widths from the source's accuracy statement (`timeUncertainty`). An extremum is secondary where a more
  * extreme one of its kind lies within half a sidereal period on either side.
  */
-export function passages(ephemeris: Ephemeris, pair: PairName | Pair, query: PassageQuery): Generator<Passage, void, undefined> {
+export function passages(
+  ephemeris: Ephemeris,
+  pair: PairName | Pair,
+  query: PassageQuery,
+): Generator<Passage, void, undefined> {
   const from = tdbOf(query.from, ephemeris.leapSeconds);
   const to = tdbOf(query.to, ephemeris.leapSeconds);
   if (!(from < to)) {
@@ -80,7 +84,10 @@ function* passagesBetween(
   let centre = 0; // its place in the window
   let ended = false;
   for (;;) {
-    while (!ended && (window.length <= centre || (window.at(-1) as Ranked).tdb <= (window[centre] as Ranked).tdb + reach)) {
+    while (
+      !ended &&
+      (window.length <= centre || (window.at(-1) as Ranked).tdb <= (window[centre] as Ranked).tdb + reach)
+    ) {
       const found = next();
       if (found) window.push(rankedOf(found, measures));
       else ended = true;
@@ -110,7 +117,12 @@ function rankedOf({ kind, tdb, supply }: SuppliedExtremum, measures: Float64Arra
   return { kind, tdb, supply, distance: measures[0] as number, acceleration: measures[1] as number };
 }
 
-function rankIn(window: readonly Ranked[], it: Ranked, reach: number, covered: { from: number; to: number }): ApsisRank {
+function rankIn(
+  window: readonly Ranked[],
+  it: Ranked,
+  reach: number,
+  covered: { from: number; to: number },
+): ApsisRank {
   for (const other of window) {
     if (other === it || other.kind !== it.kind || Math.abs(other.tdb - it.tdb) > reach) continue;
     if (it.kind === "periapsis" ? other.distance < it.distance : other.distance > it.distance) return "secondary";

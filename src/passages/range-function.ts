@@ -1,5 +1,5 @@
-import { ApsidaryError } from "../error.ts";
 import type { Motion } from "../ephemeris/source.ts";
+import { ApsidaryError } from "../error.ts";
 
 /** Distance of a moving point from its centre as a function of time, with its derivatives; times in TDB seconds past J2000. */
 export interface RangeFunction {

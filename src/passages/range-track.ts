@@ -5,8 +5,8 @@ import { type Moment, tdbOf } from "../time/tdb-of.ts";
 import { previousPassage } from "./next-passage.ts";
 import type { Passage } from "./passage.ts";
 import { passages } from "./passages.ts";
-import { type SourceChoice, timelineFor } from "./timeline-for.ts";
 import { type Range, rangeAt } from "./range-at.ts";
+import { type SourceChoice, timelineFor } from "./timeline-for.ts";
 
 /** A distance among the extremes on its two sides. */
 export interface TrackedRange extends Range {

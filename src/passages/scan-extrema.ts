@@ -1,5 +1,5 @@
-import type { Span } from "../ephemeris/source.ts";
 import type { ApsisKind } from "../bodies/term.ts";
+import type { Span } from "../ephemeris/source.ts";
 import { brentMinimum } from "../numeric/brent-minimum.ts";
 import { brentZero } from "../numeric/brent-zero.ts";
 import type { RangeFunction } from "./range-function.ts";
@@ -92,7 +92,11 @@ function scanByRate(range: RangeFunction, span: Span, step: number, from: number
       }
       const start = a;
       const turnsAtB =
-        fa < 0 === fb < 0 && fb < 0 === fc < 0 && Math.abs(fb) < Math.abs(fa) && Math.abs(fb) <= Math.abs(fc) && start < c;
+        fa < 0 === fb < 0 &&
+        fb < 0 === fc < 0 &&
+        Math.abs(fb) < Math.abs(fa) &&
+        Math.abs(fb) <= Math.abs(fc) &&
+        start < c;
       const x = b;
       const fx = fb;
       a = b;

@@ -22,7 +22,10 @@ export function timelineFor(ephemeris: Ephemeris, pair: Pair, choice: SourceChoi
   if (!timeline) {
     const sources = ephemeris.sources.filter((source) => choice === "auto" || source.kind === choice);
     if (sources.length === 0) {
-      throw new ApsidaryError("not-supplied", `no source of kind "${choice}" is open; open are: ${openKinds(ephemeris)}.`);
+      throw new ApsidaryError(
+        "not-supplied",
+        `no source of kind "${choice}" is open; open are: ${openKinds(ephemeris)}.`,
+      );
     }
     timeline = timelineOf(pair, sources);
     known.set(key, timeline);

@@ -1,7 +1,7 @@
 import type { Pair } from "../bodies/pair.ts";
 import { pointLabel } from "../bodies/point.ts";
-import { ApsidaryError } from "../error.ts";
 import type { Source, Span } from "../ephemeris/source.ts";
+import { ApsidaryError } from "../error.ts";
 import { type RangeFunction, rangeFunction } from "./range-function.ts";
 import { type Extremum, scanExtrema } from "./scan-extrema.ts";
 
@@ -68,7 +68,9 @@ export function timelineOf(pair: Pair, sources: readonly Source[]): Timeline {
     }),
   );
   // A supply too short to hold an extremum cannot be paired at its seams; where another one covers it, that one serves.
-  const supplies = all.filter((supply) => holdsExtremum(supply, pair) || !all.some((other) => reachesPast(other, supply)));
+  const supplies = all.filter(
+    (supply) => holdsExtremum(supply, pair) || !all.some((other) => reachesPast(other, supply)),
+  );
   if (supplies.length === 0) {
     const asked = sources.length === 1 ? (sources[0] as Source).title : "no source that is open";
     throw new ApsidaryError(

@@ -61,7 +61,12 @@ describe("the scan for extrema", () => {
 
   test("finds the same extrema on distances alone, to what their flatness allows", () => {
     const n = (2 * Math.PI) / (27.55 * DAY);
-    const found = extrema((t) => 384400 - 20000 * Math.cos(n * t), undefined, { from: -40 * DAY, to: 40 * DAY }, 2.75 * DAY);
+    const found = extrema(
+      (t) => 384400 - 20000 * Math.cos(n * t),
+      undefined,
+      { from: -40 * DAY, to: 40 * DAY },
+      2.75 * DAY,
+    );
     expect(found.map((e) => e.kind)).toEqual(["periapsis", "apoapsis", "periapsis", "apoapsis", "periapsis"]);
     // √(2 ε r / r̈) with r = 404 400 km, r̈ = 20 000 n² km/s²: 0.03 s; and the tolerance of 0.05 s
     for (const [i, e] of found.entries()) expect(Math.abs(e.tdb - (i - 2) * 13.775 * DAY)).toBeLessThan(0.1);

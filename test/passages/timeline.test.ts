@@ -1,7 +1,7 @@
 import fc from "fast-check";
 import { describe, expect, test } from "vitest";
 import { type SuppliedExtremum, timelineOf } from "../../src/passages/timeline.ts";
-import { MONTH, cosineSource, moon, syntheticSource } from "./synthetic.ts";
+import { cosineSource, MONTH, moon, syntheticSource } from "./synthetic.ts";
 
 function list(sources: Parameters<typeof timelineOf>[1], from: number, to: number): SuppliedExtremum[] {
   const next = timelineOf(moon, sources).extremaFrom(from);
@@ -20,7 +20,11 @@ describe("the timeline of a pair", () => {
     fc.assert(
       fc.property(edge, fc.double({ min: 1.1, max: 5, noNaN: true }), disagreement, (start, months, late) => {
         const better = { from: start, to: start + months * MONTH };
-        const found = list([cosineSource("better", better, 0), cosineSource("net", wide, late)], -15 * MONTH, 15 * MONTH);
+        const found = list(
+          [cosineSource("better", better, 0), cosineSource("net", wide, late)],
+          -15 * MONTH,
+          15 * MONTH,
+        );
         for (let i = 1; i < found.length; i++) {
           const [before, after] = [found[i - 1] as SuppliedExtremum, found[i] as SuppliedExtremum];
           expect(after.kind).not.toBe(before.kind);
@@ -38,7 +42,10 @@ describe("the timeline of a pair", () => {
   });
 
   test("gives the same list, to the bit, when it is cut anywhere near a seam and joined", () => {
-    const sources = [cosineSource("better", { from: 0.37 * MONTH, to: 4.1 * MONTH }, 0), cosineSource("net", wide, 0.06 * MONTH)];
+    const sources = [
+      cosineSource("better", { from: 0.37 * MONTH, to: 4.1 * MONTH }, 0),
+      cosineSource("net", wide, 0.06 * MONTH),
+    ];
     const whole = list(sources, -3 * MONTH, 8 * MONTH).map((e) => [e.kind, e.tdb, e.supply.source.id]);
     fc.assert(
       fc.property(fc.double({ min: -3 * MONTH, max: 8 * MONTH, noNaN: true }), (cut) => {
@@ -50,9 +57,9 @@ describe("the timeline of a pair", () => {
 
   test("uses the next source where a better one is too short to hold an extremum", () => {
     const short = cosineSource("short", { from: 0.1 * MONTH, to: 0.3 * MONTH }, 0);
-    expect(list([short, cosineSource("net", wide, 0)], -1.1 * MONTH, 0.9 * MONTH).map((e) => e.supply.source.id)).toEqual(
-      Array(4).fill("net"),
-    );
+    expect(
+      list([short, cosineSource("net", wide, 0)], -1.1 * MONTH, 0.9 * MONTH).map((e) => e.supply.source.id),
+    ).toEqual(Array(4).fill("net"));
   });
 
   test("stops at a gap between sources and says what is covered", () => {
@@ -72,6 +79,8 @@ describe("the timeline of a pair", () => {
   });
 
   test("refuses a pair that nobody supplies, saying so in one line", () => {
-    expect(() => timelineOf(moon, [syntheticSource("empty", [], () => 1)])).toThrow(/^empty does not supply moon-earth .*\.$/);
+    expect(() => timelineOf(moon, [syntheticSource("empty", [], () => 1)])).toThrow(
+      /^empty does not supply moon-earth .*\.$/,
+    );
   });
 });
