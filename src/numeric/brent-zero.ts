@@ -12,7 +12,7 @@ const MACHINE_EPSILON = 2 ** -52;
  * @param fa   `f(a)`, so that a value already known is not computed again
  * @param b    the other end
  * @param fb   `f(b)`; its sign must differ from that of `fa`, or one of them be zero
- * @param tolerance  absolute, in the unit of `a`; the zero lies within it (plus the resolution of the number) of the result
+ * @param tolerance  absolute, in the unit of `a`; the zero lies within twice it (plus the resolution of the number) of the result
  * @returns a point of the last bracket, which is at most twice the tolerance wide; `NaN` where the signs do not differ
  *
  * Method: R. P. Brent, *Algorithms for Minimization without Derivatives* (1973), ch. 4, procedure `zero`; the names are
