@@ -12,8 +12,10 @@ export function nearestName(given: string, known: Iterable<string>): string | nu
   let best: string | null = null;
   let least = Infinity;
   for (const name of known) {
+    const allowed = Math.max(2, Math.floor(name.length / 3));
+    if (Math.abs(wanted.length - name.length) > allowed) continue; // as many edits at least: a long text costs nothing
     const edits = editDistance(wanted, name.toLowerCase());
-    if (edits < least && edits <= Math.max(2, Math.floor(name.length / 3))) {
+    if (edits < least && edits <= allowed) {
       best = name;
       least = edits;
     }

@@ -104,7 +104,7 @@ export function pairOf(name: string | Pair): Pair {
   const near = nearestName(name, known.keys());
   throw new ApsidaryError(
     "bad-pair",
-    `unknown pair "${name}"${near ? `; did you mean "${near}"?` : ""} A pair is the moving point, then the centre: ` +
+    `unknown pair ${JSON.stringify(name.slice(0, 60))}${near ? `; did you mean "${near}"?` : ""} A pair is the moving point, then the centre: ` +
       "moon-earth, earth-sun, emb-ssb, jupiter-sun, io-jupiter …",
   );
 }
