@@ -38,7 +38,7 @@ export function readDaf(bytes: Uint8Array, name: string): Daf {
   const idWord = latin(bytes, 0, 8);
   if (!idWord.startsWith("DAF/") && !idWord.startsWith("NAIF/DAF")) {
     throw fail(
-      `is not a DAF: it begins with ${JSON.stringify(idWord)}, a kernel begins with "DAF/SPK". Give an SPK file.`,
+      `is not a DAF: it begins with ${JSON.stringify(line(bytes, 0, 8))}, a kernel begins with "DAF/SPK". Give an SPK file.`,
     );
   }
   if (bytes.length < RECORD_BYTES) {
@@ -55,14 +55,14 @@ export function readDaf(bytes: Uint8Array, name: string): Daf {
   if (doubles < 0 || doubles > 124 || integers < 2 || integers > 250) {
     throw fail(`has a damaged first record: summaries of ${doubles} doubles and ${integers} integers.`);
   }
-  const words = wordsOf(bytes, little);
+  const summaries = readSummaries(bytes, view, little, firstSummaryRecord, doubles, integers, fail);
   return Object.freeze({
-    idWord: idWord.trimEnd(),
-    internalName: latin(bytes, 16, 60).trimEnd(),
+    idWord: line(bytes, 0, 8),
+    internalName: line(bytes, 16, 60),
     byteOrder: little ? "little-endian" : "big-endian",
     comments: readComments(bytes, firstSummaryRecord),
-    summaries: readSummaries(bytes, view, little, firstSummaryRecord, doubles, integers, fail),
-    words,
+    summaries,
+    words: wordsOf(bytes, little),
   });
 }
 
@@ -72,6 +72,18 @@ function latin(bytes: Uint8Array, start: number, length: number): string {
   let text = "";
   for (const byte of bytes.subarray(start, start + length)) text += String.fromCharCode(byte);
   return text;
+}
+
+/** The same as one line that may be shown: no character that moves a terminal's cursor. */
+function line(bytes: Uint8Array, start: number, length: number): string {
+  return printable(latin(bytes, start, length))
+    .replaceAll("\n", " ")
+    .trimEnd();
+}
+
+function printable(text: string): string {
+  // biome-ignore lint/suspicious/noControlCharactersInRegex: these are what is taken out
+  return text.replace(/[\x00-\x09\x0b-\x1f\x7f-\x9f]/g, " ");
 }
 
 function checkTransfer(bytes: Uint8Array, fail: Fail): void {
@@ -88,10 +100,12 @@ function byteOrderOf(view: DataView, bytes: Uint8Array, fail: Fail): boolean {
   const format = latin(bytes, 88, 8);
   if (format === "LTL-IEEE") return true;
   if (format === "BIG-IEEE") return false;
-  // Old files do not say. The number of doubles in a summary is small in the right order and huge in the other.
-  if (view.getUint32(8, true) < 256) return true;
-  if (view.getUint32(8, false) < 256) return false;
-  throw fail(`has a number format that is not read: ${JSON.stringify(format)}; LTL-IEEE and BIG-IEEE are.`);
+  if (latin(bytes, 0, 8) === "NAIF/DAF") {
+    // Old files do not say. The number of doubles in a summary is small in the right order and huge in the other.
+    if (view.getUint32(8, true) < 256) return true;
+    if (view.getUint32(8, false) < 256) return false;
+  }
+  throw fail(`has a number format that is not read: ${JSON.stringify(line(bytes, 88, 8))}; LTL-IEEE and BIG-IEEE are.`);
 }
 
 function wordsOf(bytes: Uint8Array, little: boolean): Float64Array {
@@ -112,7 +126,7 @@ function readComments(bytes: Uint8Array, firstSummaryRecord: number): string {
     text += latin(bytes, (record - 1) * RECORD_BYTES, 1000);
   }
   const end = text.indexOf("\x04");
-  return (end < 0 ? text : text.slice(0, end)).replaceAll("\0", "\n").trimEnd();
+  return printable((end < 0 ? text : text.slice(0, end)).replaceAll("\0", "\n")).trimEnd();
 }
 
 function readSummaries(
@@ -143,7 +157,7 @@ function readSummaries(
     for (let i = 0; i < count; i++) {
       const at = start + 8 * (3 + i * summaryWords);
       summaries.push({
-        name: latin(bytes, start + RECORD_BYTES + i * 8 * summaryWords, 8 * summaryWords).trimEnd(),
+        name: line(bytes, start + RECORD_BYTES + i * 8 * summaryWords, 8 * summaryWords),
         doubles: Array.from({ length: doubles }, (_, k) => view.getFloat64(at + 8 * k, little)),
         integers: Array.from({ length: integers }, (_, k) => view.getInt32(at + 8 * doubles + 4 * k, little)),
       });

@@ -42,12 +42,12 @@ export interface KernelIdentity {
  */
 export function openKernel(bytes: Uint8Array, identity: KernelIdentity): Source {
   const spk = readSpk(bytes, identity.title);
-  const links = linksOf(spk.segments);
+  const net = netOf(spk.segments);
   const routes = new Map<string, Route>();
   const routeOf = (pair: Pair): Route => {
     let route = routes.get(pair.name);
     if (!route) {
-      route = findRoute(links, pair.target, pair.centre);
+      route = findRoute(net, pair.target, pair.centre, identity.title);
       routes.set(pair.name, route);
     }
     return route;
@@ -85,16 +85,29 @@ export function openKernel(bytes: Uint8Array, identity: KernelIdentity): Source 
   });
 }
 
-function linksOf(segments: readonly SpkSegment[]): Link[] {
+/** The links that touch each point. */
+type Net = ReadonlyMap<PointId, readonly Link[]>;
+
+function netOf(segments: readonly SpkSegment[]): Net {
   const groups = new Map<string, SpkSegment[]>();
   for (const segment of segments) {
     const key = `${segment.target}/${segment.centre}`;
-    groups.set(key, [segment, ...(groups.get(key) ?? [])]);
+    const group = groups.get(key);
+    if (group) group.push(segment);
+    else groups.set(key, [segment]);
   }
-  return [...groups.values()].map((group) => {
+  const net = new Map<PointId, Link[]>();
+  for (const group of groups.values()) {
+    group.reverse();
     const { target, centre } = group[0] as SpkSegment;
-    return { target, centre, segments: group, spans: unionOf(group) };
-  });
+    const link = { target, centre, segments: group, spans: unionOf(group) };
+    for (const end of [target, centre]) {
+      const touching = net.get(end);
+      if (touching) touching.push(link);
+      else net.set(end, [link]);
+    }
+  }
+  return net;
 }
 
 function unionOf(spans: readonly Span[]): Span[] {
@@ -109,35 +122,56 @@ function unionOf(spans: readonly Span[]): Span[] {
 
 function intersectionOf(a: readonly Span[], b: readonly Span[]): Span[] {
   const common: Span[] = [];
-  for (const x of a) {
-    for (const y of b) {
-      const from = Math.max(x.from, y.from);
-      const to = Math.min(x.to, y.to);
-      if (from < to) common.push({ from, to });
-    }
+  for (let i = 0, j = 0; i < a.length && j < b.length; ) {
+    const x = a[i] as Span;
+    const y = b[j] as Span;
+    const from = Math.max(x.from, y.from);
+    const to = Math.min(x.to, y.to);
+    if (from < to) common.push({ from, to });
+    if (x.to < y.to) i++;
+    else j++;
   }
   return common;
 }
 
+/** Whether every one of some spans lies inside one of others; both in order, none overlapping. */
+function liesWithin(inner: readonly Span[], outer: readonly Span[]): boolean {
+  let j = 0;
+  return inner.every((span) => {
+    while (j < outer.length && (outer[j] as Span).to < span.to) j++;
+    return j < outer.length && (outer[j] as Span).from <= span.from;
+  });
+}
+
+/** Chains tried before a kernel is refused; planets and all known moons make a few hundred. */
+const MOST_ROUTES = 20_000;
+
 /** Breadth first from the centre: the first chain that reaches the target with a span in common is a shortest one. */
-function findRoute(links: readonly Link[], target: PointId, centre: PointId): Route {
+function findRoute(net: Net, target: PointId, centre: PointId, title: string): Route {
   const whole: Span[] = [{ from: -Infinity, to: Infinity }];
-  let frontier: { at: PointId; visited: readonly PointId[]; route: Route }[] = [
-    { at: centre, visited: [centre], route: { steps: [], spans: whole } },
-  ];
+  // A point that a chain no longer has reached for the same time is not gone on from again, so rings end and meshes stay tractable.
+  const reached = new Map<PointId, (readonly Span[])[]>([[centre, [whole]]]);
+  let tried = 0;
+  let frontier: { at: PointId; route: Route }[] = [{ at: centre, route: { steps: [], spans: whole } }];
   while (frontier.length > 0) {
     const next: typeof frontier = [];
-    for (const { at, visited, route } of frontier) {
-      for (const link of links) {
-        const sign = link.centre === at ? 1 : link.target === at ? -1 : 0;
-        if (sign === 0) continue;
-        const to = sign === 1 ? link.target : link.centre;
-        if (visited.includes(to)) continue;
+    for (const { at, route } of frontier) {
+      for (const link of net.get(at) ?? []) {
+        const step: Step = { link, sign: link.centre === at ? 1 : -1 };
+        const to = step.sign === 1 ? link.target : link.centre;
         const spans = intersectionOf(route.spans, link.spans);
-        if (spans.length === 0) continue;
-        const longer = { steps: [...route.steps, { link, sign } as Step], spans };
+        const before = reached.get(to) ?? [];
+        if (spans.length === 0 || before.some((earlier) => liesWithin(spans, earlier))) continue;
+        const longer = { steps: [...route.steps, step], spans };
         if (to === target) return longer;
-        next.push({ at: to, visited: [...visited, to], route: longer });
+        reached.set(to, [...before, spans]);
+        if (++tried > MOST_ROUTES) {
+          throw new ApsidaryError(
+            "bad-kernel",
+            `${title} chains its segments in more than ${MOST_ROUTES} ways; take some out.`,
+          );
+        }
+        next.push({ at: to, route: longer });
       }
     }
     frontier = next;

@@ -56,7 +56,18 @@ export function readSpk(bytes: Uint8Array, name: string): Spk {
       `${name} is a DAF but no SPK: its kind is ${daf.idWord}. Give a file of kind DAF/SPK.`,
     );
   }
-  const segments = daf.summaries.map((_, index) => readSegment(daf, index, name));
+  let words = 0;
+  const segments = daf.summaries.map((_, index) => {
+    const segment = readSegment(daf, index, name);
+    words += segment.records * segment.recordWords;
+    if (words > daf.words.length) {
+      throw new ApsidaryError(
+        "bad-kernel",
+        `${name} is damaged: its segments claim more words than the file has. Fetch it again.`,
+      );
+    }
+    return segment;
+  });
   if (segments.length === 0) throw new ApsidaryError("bad-kernel", `${name} holds no segment. Fetch the file again.`);
   return Object.freeze({ name, daf, segments: Object.freeze(segments) });
 }
@@ -82,7 +93,8 @@ function readSegment(daf: Daf, index: number, file: string): SpkSegment {
   const series = type === 2 ? 3 : 6;
   const coefficients = (recordWords - 2) / series;
   if (
-    !(recordSeconds > 0) ||
+    !(recordSeconds > 0 && recordSeconds < Infinity) ||
+    !Number.isFinite(firstStart) ||
     !Number.isInteger(records) ||
     records < 1 ||
     !Number.isInteger(coefficients) ||
@@ -96,6 +108,17 @@ function readSegment(daf: Daf, index: number, file: string): SpkSegment {
   const slack = 1e-3 * recordSeconds;
   if (!(from < to) || from < firstStart - slack || to > firstStart + records * recordSeconds + slack) {
     throw fail(`says that it covers ${from} to ${to} s past J2000, which its records do not.`);
+  }
+  for (let record = 0; record < records; record++) {
+    const at = first - 1 + record * recordWords;
+    const middle = daf.words[at] as number;
+    const radius = daf.words[at + 1] as number;
+    const start = firstStart + record * recordSeconds;
+    if (!(middle - radius <= start + slack && middle + radius >= start + recordSeconds - slack && radius < Infinity)) {
+      throw fail(
+        `is damaged: its record ${record + 1} should cover ${recordSeconds} s from ${start}, and has its middle at ${middle}, radius ${radius}.`,
+      );
+    }
   }
   return Object.freeze({
     name,
