@@ -82,8 +82,7 @@ function line(bytes: Uint8Array, start: number, length: number): string {
 }
 
 function printable(text: string): string {
-  // biome-ignore lint/suspicious/noControlCharactersInRegex: these are what is taken out
-  return text.replace(/[\x00-\x09\x0b-\x1f\x7f-\x9f]/g, " ");
+  return text.replace(/[^\P{Cc}\n]/gu, " ");
 }
 
 function checkTransfer(bytes: Uint8Array, fail: Fail): void {
