@@ -1,0 +1,94 @@
+import type { PassageRow } from "../passages/to-row.ts";
+import type { Column } from "../report/column.ts";
+import { durationText } from "../report/duration-text.ts";
+import { groupedNumber } from "../report/grouped-number.ts";
+import { printedHalfWidth } from "../report/half-width.ts";
+import { textTable } from "../report/text-table.ts";
+import { cautionsOf } from "./cautions.ts";
+import { footOf } from "./foot.ts";
+import { printedUtc } from "./printed-utc.ts";
+import type { Provenance } from "./provenance.ts";
+
+const COLUMNS: readonly Column<PassageRow>[] = [
+  { title: "UTC", unit: "", values: (row) => printedUtc(row.utc, row.utcUncertaintySeconds), digits: 0 },
+  { title: "known to", unit: "", values: (row) => durationText(row.utcUncertaintySeconds), digits: 0 },
+  { title: "pair", unit: "", values: (row) => row.pair, digits: 0 },
+  { title: "passage", unit: "", values: shortTerm, digits: 0 },
+  { title: "distance", unit: "km", values: (row) => row.distanceKm, digits: (row) => halfWidth(row).digits },
+  {
+    title: "",
+    unit: "",
+    values: (row) => `± ${groupedNumber(halfWidth(row).value, halfWidth(row).digits)}`,
+    digits: 0,
+  },
+  { title: "source", unit: "", values: (row) => row.source, digits: 0 },
+  { title: "marks", unit: "", values: (row) => marksOf(row).join(", "), digits: 0 },
+];
+
+/** What the marks mean, in the order in which they stand. */
+const MARKS = {
+  secondary: "a more extreme passage of the same kind lies within half a period: no apsis of the orbit",
+  "rank unknown": "the sources end too near to tell whether it is principal or secondary",
+  uncertain: "the source's error could merge it with its neighbour",
+  UT: "before 1972 times are UT1, reckoned with ΔT",
+  predicted: "after the leap-second list expires; its last offset is held",
+  assumed: "a kernel of unknown accuracy, taken to be as good as the built-in one",
+} as const;
+type Mark = keyof typeof MARKS;
+
+/**
+ * Writes the passages as a report for people, line by line: a title, a table, and a foot that explains what stands in it.
+ *
+ * Every time is printed to the unit that its uncertainty defends, every distance to the place of its uncertainty.
+ *
+ * @param title what was asked
+ * @param rows  taken one at a time
+ * @param made  the provenance
+ */
+export function* passagesReport(
+  title: string,
+  rows: Iterable<PassageRow>,
+  made: Provenance,
+): Generator<string, void, undefined> {
+  let count = 0;
+  const marks = new Set<Mark>();
+  const notes = new Set<string>();
+  const watched = function* () {
+    for (const row of rows) {
+      count++;
+      for (const mark of marksOf(row)) marks.add(mark);
+      for (const note of cautionsOf(row)) notes.add(note);
+      yield row;
+    }
+  };
+  yield `${title}\n\n`;
+  yield* textTable(COLUMNS, watched());
+  yield "\n";
+  if (count === 0) yield "No passage in this span.\n";
+  for (const mark of Object.keys(MARKS) as Mark[]) if (marks.has(mark)) yield `${mark}: ${MARKS[mark]}.\n`;
+  if (count > 0) {
+    yield 'Times are rounded to what is known; "known to" and ± are half-widths that at least 95 % of such passages keep.\n';
+    yield "Distances are geometric, from centre to centre at one instant.\n";
+  }
+  for (const note of notes) yield `${note}\n`;
+  yield* footOf(made, marks.has("UT"));
+}
+
+function shortTerm(row: PassageRow): string {
+  return row.term.replace(/ of distance$/, "");
+}
+
+function halfWidth(row: PassageRow) {
+  return printedHalfWidth(row.distanceUncertaintyKm);
+}
+
+function marksOf(row: PassageRow): Mark[] {
+  const marks: Mark[] = [];
+  if (row.rank === "secondary") marks.push("secondary");
+  if (row.rank === null) marks.push("rank unknown");
+  if (row.existence === "uncertain") marks.push("uncertain");
+  if (row.utcBasis === "delta-t") marks.push("UT");
+  if (row.utcBasis === "predicted") marks.push("predicted");
+  if (row.accuracyBasis === "assumed") marks.push("assumed");
+  return marks;
+}

@@ -1,0 +1,49 @@
+import type { Command } from "commander";
+import { addAnswerOptions, addSourceOptions, type SharedOptions } from "./options.ts";
+import { pairsHelp } from "./pairs.ts";
+
+/** The options of `passages`, as given. */
+export interface PassagesOptions extends SharedOptions {
+  readonly from?: string;
+  readonly to?: string;
+  readonly next?: string;
+  readonly kind?: string;
+  readonly rank?: string;
+}
+
+/** Adds the command that lists passages. */
+export function addPassages(program: Command): void {
+  const command = program
+    .command("passages")
+    .summary("list the passages of one or more pairs in a span of time")
+    .description(
+      "Lists every passage through a least or a greatest distance in a span of time, in order, each with its uncertainty\n" +
+        "and the source that supplied it.",
+    )
+    .argument("<pairs...>", "one or more pairs, such as moon-earth,earth-sun")
+    .option("--from <when>", "beginning, included: ISO 8601 or a bare year; UTC unless an offset is given")
+    .option("--to <when>", "end, excluded")
+    .option("--next <n>", "instead of --to: the first N passages from --from on")
+    .option("--kind <kind>", "periapsis | apoapsis | both (default: both)")
+    .option(
+      "--rank <rank>",
+      "principal | all; principal leaves out lesser extremes beside a greater one (default: all)",
+    );
+  addAnswerOptions(addSourceOptions(command))
+    .addHelpText(
+      "after",
+      `
+${pairsHelp()}
+
+Examples:
+  apsidary passages moon-earth --from 2027 --to 2028
+  apsidary passages earth-sun,moon-earth --from 2027-01-01 --to 2027-02-01T00:00+13:00
+  apsidary passages mars-sun --from 2027 --next 3 --kind periapsis
+  apsidary passages neptune-sun --from 2040 --to 2055 --rank principal
+  apsidary passages moon-earth --from 2027 --to 2047 --format csv --out moon.csv`,
+    )
+    .action(async (words: string[], options: PassagesOptions) => {
+      const { runPassages } = await import("./run-passages.ts");
+      await runPassages(words, options);
+    });
+}

@@ -1,0 +1,137 @@
+import type { Pair } from "../bodies/pair.ts";
+import type { Ephemeris } from "../ephemeris/open-sources.ts";
+import { ApsidaryError } from "../error.ts";
+import { mergedPassages } from "../passages/merged-passages.ts";
+import type { Passage } from "../passages/passage.ts";
+import type { PassageQuery } from "../passages/passages.ts";
+import { timelineFor } from "../passages/timeline-for.ts";
+import { type PassageRow, toRow } from "../passages/to-row.ts";
+import { answerPieces } from "./answer-pieces.ts";
+import { choiceOf, shown } from "./choice-of.ts";
+import { edgeOf, requireOrder } from "./edge.ts";
+import { openFor } from "./open-for.ts";
+import { formatOf, sourceChoiceOf } from "./options.ts";
+import { pairsOf } from "./pairs.ts";
+import type { PassagesOptions } from "./passages.ts";
+import { passagesReport } from "./passages-report.ts";
+import { mayShowProgress, withProgress } from "./progress.ts";
+import { provenanceOf } from "./provenance.ts";
+import { writeAnswer } from "./write-answer.ts";
+
+const NAMES: readonly (keyof PassageRow)[] = [
+  "pair",
+  "targetPoint",
+  "centrePoint",
+  "kind",
+  "term",
+  "rank",
+  "existence",
+  "tdbSeconds",
+  "tdb",
+  "utc",
+  "utcBasis",
+  "distanceKm",
+  "distanceAu",
+  "timeUncertaintySeconds",
+  "distanceUncertaintyKm",
+  "utcUncertaintySeconds",
+  "rangeAccelerationKmPerDay2",
+  "source",
+  "accuracyBasis",
+];
+
+/**
+ * Answers `apsidary passages`.
+ *
+ * @param words   the pairs, as given
+ * @param options the options, as given
+ * @throws ApsidaryError for whatever cannot be used, before anything is written
+ */
+export async function runPassages(words: readonly string[], options: PassagesOptions): Promise<void> {
+  const format = formatOf(options);
+  const source = sourceChoiceOf(options);
+  const kind = choiceOf("--kind", options.kind ?? "both", ["periapsis", "apoapsis", "both"]);
+  const rank = choiceOf("--rank", options.rank ?? "all", ["principal", "all"]);
+  const count = countOf(options);
+  const pairs = pairsOf(words);
+
+  const ephemeris = await openFor(options);
+  const from = edgeOf("--from", options.from, ephemeris.leapSeconds);
+  const what = { kind, rank, source };
+  const to =
+    count === null ? edgeOf("--to", options.to, ephemeris.leapSeconds) : endOfNext(ephemeris, pairs, from, count, what);
+  requireOrder(from, to, options);
+  const found = mergedPassages(ephemeris, pairs, { from: { tdbSeconds: from }, to: { tdbSeconds: to }, ...what });
+  const made = await provenanceOf(ephemeris, { pairs, span: { from, to }, source });
+
+  const watched = withProgress(found, (passage) => passage.tdbSeconds, from, to, mayShowProgress(options.out));
+  const pieces = await answerPieces<PassageRow>(format, {
+    head: { schema: "apsidary/passages/1", made },
+    names: NAMES,
+    rows: rowsOf(watched, ephemeris, count ?? Infinity),
+    report: (rows) => passagesReport(titleOf(pairs, options), rows, made),
+  });
+  await writeAnswer(pieces, options.out);
+}
+
+function* rowsOf(found: Iterable<Passage>, ephemeris: Ephemeris, most: number): Generator<PassageRow, void, undefined> {
+  let count = 0;
+  for (const passage of found) {
+    if (count === most) return;
+    count++;
+    yield toRow(passage, ephemeris);
+  }
+}
+
+/** The number of `--next`, or `null` where there is none. */
+function countOf({ next, to }: PassagesOptions): number | null {
+  if (next === undefined) {
+    if (to !== undefined) return null;
+    throw new ApsidaryError(
+      "bad-span",
+      "--to is missing; give an end such as --to 2028, or a number of passages such as --next 5.",
+    );
+  }
+  if (to !== undefined) throw new ApsidaryError("bad-option", "--next and --to exclude each other; give one of them.");
+  const count = /^\d{1,9}$/.test(next) ? Number(next) : 0;
+  if (count > 0) return count;
+  throw new ApsidaryError(
+    "bad-option",
+    `--next ${shown(next)} is not a number of passages; give a whole number from 1 to 999999999.`,
+  );
+}
+
+/**
+ * An end of the span just past the passage that is the last of so many; the end of the sources where they hold fewer.
+ *
+ * So many passages are found twice, which keeps memory constant and lets the provenance name the sources of these rows alone.
+ */
+function endOfNext(
+  ephemeris: Ephemeris,
+  pairs: readonly Pair[],
+  from: number,
+  count: number,
+  what: Pick<PassageQuery, "kind" | "rank" | "source">,
+): number {
+  const ends = pairs.map((pair) => {
+    const { covered } = timelineFor(ephemeris, pair, what.source ?? "auto");
+    return covered.find((span) => span.from <= from && from < span.to)?.to ?? from + 1; // outside, the search refuses
+  });
+  const end = Math.min(...ends);
+  let found = 0;
+  for (const passage of mergedPassages(ephemeris, pairs, {
+    from: { tdbSeconds: from },
+    to: { tdbSeconds: end },
+    ...what,
+  })) {
+    found++;
+    if (found === count) return Math.min(passage.tdbSeconds + 1, end);
+  }
+  process.stderr.write(`apsidary: only ${found} of ${count} passages; the sources end there.\n`);
+  return end;
+}
+
+function titleOf(pairs: readonly Pair[], { from = "", to, next }: PassagesOptions): string {
+  const which = pairs.map((pair) => pair.name).join(", ");
+  return to === undefined ? `Passages of ${which}: ${next} from ${from} on` : `Passages of ${which}, ${from} to ${to}`;
+}
