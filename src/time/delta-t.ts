@@ -10,7 +10,7 @@ export interface DeltaT {
 
 /** What ΔT is taken from, for the provenance of an answer. */
 export const DELTA_T_MODEL =
-  "Espenak and Meeus 2006 before 1657, USNO table to 1961, IERS C04 to 2026.5, then a parabola of 31 s per century squared";
+  "Espenak and Meeus 2006 before 1657, USNO table to 1961, IERS C04 to 2026.5, then a parabola of 32 s per century squared";
 
 const SECONDS_PER_YEAR = 365.2425 * 86_400;
 
@@ -38,7 +38,7 @@ export function decimalYear(ttSeconds: number): number {
  * From 1657.0 to 2026.5 a half-yearly table, by Catmull-Rom cubics (continuous in value and slope; seasons are lost, at most 0.05 s).
  * Before it the polynomials of F. Espenak and J. Meeus, *Five Millennium Canon of Solar Eclipses*, NASA/TP-2006-214141, which fit
  * L. V. Morrison and F. R. Stephenson, *Journal for the History of Astronomy* 35 (2004) 327; the step of 3.7 s where the table begins is
- * spread over 1600 to 1657. After the table the last value and the tidal parabola of 31 s per century²: a continuation, no forecast.
+ * spread over 1600 to 1657. After the table the last value and the long-term parabola of 32 s per century² (Morrison and Stephenson 2004) with its vertex there: a continuation, no forecast.
  *
  * Uncertainty: to 1200 twice the published standard error of 0.8 s per century² from 1820 (Morrison and Stephenson 2004), to 1600
  * twice that of their table; from there to 1955 our own figures, wide enough to hold what determinations of
@@ -52,7 +52,7 @@ export function deltaT(year: number): DeltaT {
 export function deltaTSeconds(year: number): number {
   if (year >= DELTA_T_LAST_YEAR) {
     const centuries = (year - DELTA_T_LAST_YEAR) / 100;
-    return entry(DELTA_T_TABLE.length - 1) + 31 * centuries * centuries;
+    return entry(DELTA_T_TABLE.length - 1) + 32 * centuries * centuries;
   }
   if (year >= DELTA_T_FIRST_YEAR) return interpolated(year);
   if (year >= 1600) {

@@ -50,9 +50,11 @@ export function utcOf(tdb: number, leaps: LeapSecondList = builtInLeapSeconds())
   const taiSeconds = ttSeconds - TT_MINUS_TAI;
   for (let i = leaps.steps.length - 1; i >= 0; i--) {
     const step = leaps.steps[i];
-    if (step === undefined || (ttDay - step.utcDay) * 86_400 + taiSeconds < step.taiMinusUtc) continue;
+    if (step === undefined) continue;
+    const since = (ttDay - step.utcDay) * 86_400 + taiSeconds - step.taiMinusUtc;
+    if (since < (i === 0 ? -RESOLUTION : 0)) continue;
     const next = leaps.steps[i + 1];
-    const seconds = taiSeconds - step.taiMinusUtc;
+    const seconds = taiSeconds - step.taiMinusUtc - Math.min(since, 0);
     const carry = Math.floor(seconds / 86_400);
     let day = ttDay + carry;
     let secondsOfDay = Math.min(seconds - carry * 86_400, BEFORE_MIDNIGHT);
@@ -81,6 +83,9 @@ export function utcOf(tdb: number, leaps: LeapSecondList = builtInLeapSeconds())
     uncertaintySeconds,
   });
 }
+
+/** Seconds; an instant so little before 1972 is one of 1972 that was rounded, and must not lose the 0.04 s. */
+const RESOLUTION = 1e-6;
 
 /** The number next below 86 400: a tiny negative remainder must not round up to a full day. */
 const BEFORE_MIDNIGHT = 86_400 - 2 ** -36;
