@@ -5,13 +5,8 @@ export interface SpkSegmentContent {
   /** SPK ids. */
   readonly target: number;
   readonly centre: number;
-  /** 2: series for x, y, z. 3: those and series for their rates. Other numbers are written as they are, laid out like 2. */
-  readonly type: number;
-  /** SPK id of the frame; left out, 1 (J2000, taken as the ICRF). */
-  readonly frame?: number;
-  /** Span that the segment claims; left out, all of its records. */
-  readonly from?: number;
-  readonly to?: number;
+  /** 2: series for x, y, z. 3: those, then series for their rates. */
+  readonly type: 2 | 3;
   /** Start of the first record and length of each. */
   readonly start: number;
   readonly recordSeconds: number;
@@ -33,6 +28,8 @@ const RECORD_WORDS = 128;
 const COMMENT_BYTES = 1000;
 const SUMMARY_WORDS = 5;
 const SUMMARIES_PER_RECORD = 25;
+/** SPK id of the frame; the ICRF is written under it. */
+const J2000_FRAME = 1;
 /** By these characters a reader sees whether a text-mode transfer has changed the file. */
 const TRANSFER_CHECK = "FTPSTR:\r:\n:\r\n:\r\x00:\x81:\x10\xce:ENDFTP";
 
@@ -86,10 +83,10 @@ export function writeSpk(segments: readonly SpkSegmentContent[], options: SpkOpt
     inBlock.forEach((segment, i) => {
       const { start, recordSeconds, records } = segment;
       const summary = control + 3 + i * SUMMARY_WORDS;
-      word(summary, segment.from ?? start);
-      word(summary + 1, segment.to ?? start + records.length * recordSeconds);
+      word(summary, start);
+      word(summary + 1, start + records.length * recordSeconds);
       const size = sizes[block * SUMMARIES_PER_RECORD + i] as number;
-      const integers = [segment.target, segment.centre, segment.frame ?? 1, segment.type, at, at + size - 1];
+      const integers = [segment.target, segment.centre, J2000_FRAME, segment.type, at, at + size - 1];
       integers.forEach((value, k) => {
         view.setInt32(8 * (summary + 1) + 4 * k, value, little);
       });

@@ -1,13 +1,13 @@
 import { addChebyshev } from "../../../numeric/chebyshev.ts";
 
-/** Writes x, y, z (km) and their rates (km a day) at a time in days to `out[0 … 5]`. */
-export type Path = (days: number, out: Float64Array) => void;
+/** Writes x, y, z (km) and their rates (km/s) at the time `from + offset` (seconds) to `out[0 … 5]`. */
+export type Path = (from: number, offset: number, out: Float64Array) => void;
 
 /** Turns a path on an interval into Chebyshev coefficients. */
 export interface Fitter {
   /**
    * @param path the path
-   * @param from start of the interval, days
+   * @param from start of the interval, seconds
    * @returns the coefficients of x, then y, then z
    */
   fit(path: Path, from: number): Float64Array;
@@ -19,14 +19,14 @@ export interface Fitter {
  * Positions and velocities at both ends are kept exactly, so neighbouring records join without a step; in between the
  * squares of the errors of position and of velocity (times half the interval, and a weight) are least, at equally spaced times.
  *
- * @param intervalDays length of a record
- * @param n            coefficients a component, at least 5
- * @param weight       of velocities against positions
+ * @param seconds length of a record
+ * @param n       coefficients a component, at least 5
+ * @param weight  of velocities against positions
  *
  * Method: X X Newhall, *Numerical representation of planetary ephemerides*, Celestial Mechanics 45 (1989) 305, who
  * took the weight 0.4.
  */
-export function makeFitter(intervalDays: number, n: number, weight = 0.1): Fitter {
+export function makeFitter(seconds: number, n: number, weight = 0.1): Fitter {
   const points = 3 * n + 1;
   const size = n + 4;
   // The normal equations with four conditions (multipliers); right-hand sides for a unit in each of the data.
@@ -62,11 +62,11 @@ export function makeFitter(intervalDays: number, n: number, weight = 0.1): Fitte
 
   const data = new Float64Array(2 * points * 3);
   const state = new Float64Array(6);
-  const half = intervalDays / 2;
+  const half = seconds / 2;
   return {
     fit(path, from) {
       for (let j = 0; j < points; j++) {
-        path(from + (intervalDays * j) / (points - 1), state);
+        path(from, (seconds * j) / (points - 1), state);
         for (let axis = 0; axis < 3; axis++) {
           data[axis * 2 * points + j] = state[axis] as number;
           data[axis * 2 * points + points + j] = (state[axis + 3] as number) * half;
@@ -118,13 +118,13 @@ function eliminate(matrix: Float64Array[], size: number): void {
 }
 
 /**
- * Measures a fit against its path: the largest distance between the two, km, and between their velocities, km a day.
+ * Measures a fit against its path: the largest distance between the two, km, and between their velocities, km/s.
  * @param checks how many times inside the interval are compared
  */
 export function fitError(
   path: Path,
   from: number,
-  intervalDays: number,
+  seconds: number,
   fit: Float64Array,
   checks: number,
 ): [number, number] {
@@ -135,9 +135,9 @@ export function fitError(
   let velocity = 0;
   for (let i = 0; i <= checks; i++) {
     const s = (2 * i) / checks - 1;
-    path(from + ((s + 1) / 2) * intervalDays, truth);
+    path(from, (seconds * i) / checks, truth);
     got.fill(0);
-    for (let axis = 0; axis < 3; axis++) addChebyshev(fit, axis * n, n, s, 2 / intervalDays, 1, got, axis, 3, 1);
+    for (let axis = 0; axis < 3; axis++) addChebyshev(fit, axis * n, n, s, 2 / seconds, 1, got, axis, 3, 1);
     const off = (k: number) => (got[k] as number) - (truth[k] as number);
     position = Math.max(position, Math.hypot(off(0), off(1), off(2)));
     velocity = Math.max(velocity, Math.hypot(off(3), off(4), off(5)));

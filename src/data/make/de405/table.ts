@@ -1,12 +1,12 @@
 import { readFileSync } from "node:fs";
 import { addChebyshev } from "../../../numeric/chebyshev.ts";
 
-/** Days from J2000 (JD 2451545.0, TDB) to the table's first row, days in a row, and rows. */
-export const TABLE_START_DAYS = 2436912.5 - 2451545.0;
-const ROW_DAYS = 32;
+/** The table's first row, TDB seconds past J2000 (JD 2436912.5), seconds in a row, and rows. */
+export const TABLE_START = (2436912.5 - 2451545.0) * 86400;
+const ROW_SECONDS = 32 * 86400;
 const ROWS = 1143;
-/** Days that the table covers: 1959-12-10 to 2060-01-30. */
-export const TABLE_DAYS = ROWS * ROW_DAYS;
+/** Seconds that the table covers: 1959-12-10 to 2060-01-30. */
+export const TABLE_SECONDS = ROWS * ROW_SECONDS;
 
 const ROW_DOUBLES = 1018;
 const ROW_BYTES = 8160;
@@ -31,10 +31,13 @@ const COLUMNS = {
 export type TableSeries = keyof typeof COLUMNS;
 
 /**
- * Writes x, y, z (km) and their rates (km a day) of a series to `out[0 … 5]`.
- * @param days days past the table's start, 0 … 36576
+ * Writes x, y, z (km) and their rates (km/s) of a series at a time `from + offset` to `out[0 … 5]`.
+ *
+ * The time comes in two parts because one number would round it to half a microsecond, in which Mercury goes 2 cm.
+ * @param from   whole seconds past the table's start
+ * @param offset seconds past `from`
  */
-export type TableReader = (series: TableSeries, days: number, out: Float64Array) => void;
+export type TableReader = (series: TableSeries, from: number, offset: number, out: Float64Array) => void;
 
 /**
  * Reads `table.f0i` of Debian's package casacore-data-jpl-de405: the Chebyshev series of JPL's DE405 as JPL gave them
@@ -52,15 +55,15 @@ export function readTable(path: string): TableReader {
       words[row * ROW_DOUBLES + i] = bytes.readDoubleLE(FIRST_BYTE + row * ROW_BYTES + 8 * i);
     }
   }
-  return (series, days, out) => {
+  return (series, from, offset, out) => {
     const [start, n, parts] = COLUMNS[series];
-    const partDays = ROW_DAYS / parts;
-    const part = Math.min(Math.floor(days / partDays), ROWS * parts - 1);
-    const s = (2 * (days - part * partDays)) / partDays - 1;
+    const partSeconds = ROW_SECONDS / parts;
+    const part = Math.min(Math.floor((from + offset) / partSeconds), ROWS * parts - 1);
+    const s = (2 * (from - part * partSeconds + offset)) / partSeconds - 1;
     const first = Math.floor(part / parts) * ROW_DOUBLES + start + (part % parts) * 3 * n;
     out.fill(0, 0, 6);
     for (let axis = 0; axis < 3; axis++) {
-      addChebyshev(words, first + axis * n, n, s, 2 / partDays, 1, out, axis, 3, 1);
+      addChebyshev(words, first + axis * n, n, s, 2 / partSeconds, 1, out, axis, 3, 1);
     }
   };
 }
