@@ -8,22 +8,22 @@ import type { Accuracy, AccuracyBasis } from "./source.ts";
  *
  * `seconds` is what passages differ by between kindred ephemerides: the larger of DE405 against DE200 and DE405 against
  * an ephemeris made from DE431, where DE200 is the older by twenty years of data and, for the outer planets, set aside
- * (it knew no Voyager ranging past Saturn); measured over 1960–2059. `acceleration`, km/d², is the typical range acceleration at those
- * passages: their product is the range-rate error that passages inherit. `km` is the distance's own. These are bounds
- * between kindred ephemerides, not samples of a law; the refit of the built-in kernel (up to 0.2 s, 5 m) lies inside.
+ * (it knew no Voyager ranging past Saturn); measured over 1960–2059. `acceleration`, km/d², is the median range acceleration at DE405's
+ * passages (Neptune, whose five differ tenfold: between the least and the median): their product is the range-rate error that passages inherit. `km` is the distance's own. These are bounds
+ * between kindred ephemerides, not samples of a law; the refit of the built-in kernel (up to 0.1 s, Neptune 1.1 s, 1 m) lies inside.
  */
 const ABOUT_SUN: Record<string, { seconds: number; acceleration: number; km: number }> = {
-  earth: { seconds: 1, acceleration: 740, km: 0.3 },
-  emb: { seconds: 0.6, acceleration: 740, km: 0.3 },
-  moon: { seconds: 2, acceleration: 1100, km: 0.02 },
-  mercury: { seconds: 0.3, acceleration: 60_000, km: 1 },
-  venus: { seconds: 0.3, acceleration: 574, km: 0.5 },
-  mars: { seconds: 0.5, acceleration: 1780, km: 1 },
-  jupiter: { seconds: 150, acceleration: 78, km: 30 },
-  saturn: { seconds: 470, acceleration: 27, km: 150 },
-  uranus: { seconds: 1500, acceleration: 5.5, km: 500 },
+  earth: { seconds: 1, acceleration: 790, km: 0.3 },
+  emb: { seconds: 0.6, acceleration: 760, km: 0.3 },
+  moon: { seconds: 2, acceleration: 1190, km: 0.02 },
+  mercury: { seconds: 0.2, acceleration: 41_800, km: 1 },
+  venus: { seconds: 0.3, acceleration: 570, km: 0.5 },
+  mars: { seconds: 0.5, acceleration: 2160, km: 1 },
+  jupiter: { seconds: 150, acceleration: 86, km: 30 },
+  saturn: { seconds: 470, acceleration: 29, km: 150 },
+  uranus: { seconds: 1500, acceleration: 5.7, km: 500 },
   neptune: { seconds: 23_400, acceleration: 0.4, km: 3000 },
-  pluto: { seconds: 4_200, acceleration: 7, km: 3000 },
+  pluto: { seconds: 4200, acceleration: 13, km: 3000 },
 };
 
 /**

@@ -162,13 +162,9 @@ export function addSegmentState(
   const s = (tdb - (words[at] as number)) * scale;
   const first = at + 2;
   if (segment.type === 2) {
-    addChebyshev(words, first, n, s, scale, sign, out, 0, 3, order);
-    addChebyshev(words, first + n, n, s, scale, sign, out, 1, 3, order);
-    addChebyshev(words, first + 2 * n, n, s, scale, sign, out, 2, 3, order);
+    addChebyshev(words, first, n, s, scale, sign, order, out, 0);
     return;
   }
-  for (let i = 0; i < 3; i++) {
-    addChebyshev(words, first + i * n, n, s, scale, sign, out, i, 3, 0);
-    if (order > 0) addChebyshev(words, first + (3 + i) * n, n, s, scale, sign, out, 3 + i, 3, order - 1);
-  }
+  addChebyshev(words, first, n, s, scale, sign, 0, out, 0);
+  if (order > 0) addChebyshev(words, first + 3 * n, n, s, scale, sign, order - 1, out, 3);
 }
