@@ -1,5 +1,5 @@
 import { beforeAll, describe, expect, test } from "vitest";
-import { type Pair, allPairs, pairOf } from "../../src/bodies/pair.ts";
+import { allPairs, type Pair, pairOf } from "../../src/bodies/pair.ts";
 import { type Ephemeris, openSources } from "../../src/ephemeris/open-sources.ts";
 import type { Source } from "../../src/ephemeris/source.ts";
 import { passages } from "../../src/passages/passages.ts";
@@ -41,15 +41,16 @@ function expectSame(source: Source, pair: Pair, from: number, to: number, step: 
 }
 
 describe("against dense sampling", () => {
-  test.each(allPairs().filter((pair) => !pair.name.endsWith("-jupiter")).map((pair) => pair.name))(
-    "%s: the finder misses no extremum over the kernel's whole span",
-    (name) => {
-      const pair = pairOf(name);
-      const kernel = ephemeris.sources.find((source) => source.kind === "kernel") as Source;
-      const span = kernel.spans(pair)[0] as { from: number; to: number };
-      expectSame(kernel, pair, span.from, span.to, name === "moon-earth" ? HOUR : 6 * HOUR);
-    },
-  );
+  test.each(
+    allPairs()
+      .filter((pair) => !pair.name.endsWith("-jupiter"))
+      .map((pair) => pair.name),
+  )("%s: the finder misses no extremum over the kernel's whole span", (name) => {
+    const pair = pairOf(name);
+    const kernel = ephemeris.sources.find((source) => source.kind === "kernel") as Source;
+    const span = kernel.spans(pair)[0] as { from: number; to: number };
+    expectSame(kernel, pair, span.from, span.to, name === "moon-earth" ? HOUR : 6 * HOUR);
+  });
 
   test.each(["io-jupiter", "europa-jupiter", "ganymede-jupiter", "callisto-jupiter"])(
     "%s: the finder misses no extremum in a year",

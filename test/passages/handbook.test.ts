@@ -77,7 +77,8 @@ describe("against published values (from memory)", () => {
   test.each(extremes)("J. Meeus, extreme perigees and apogees of the Moon: %s, %i km (%s)", (day, km, kind) => {
     const found = nextPassage(ephemeris, "moon-earth", `${day}T00:00:00Z`, kind) as Passage;
     expect(toRow(found).utc.slice(0, 10)).toBe(day);
-    expect(Math.round(found.distanceKm)).toBe(km);
+    // the published series and DE405 may round to neighbouring kilometres: 2034's is 356 445.4 by DE405
+    expect(Math.abs(found.distanceKm - km)).toBeLessThan(1);
   });
 
   test("J. Meeus, Astronomical Algorithms, example 50.a: apogee of 1988-10-07 20:30 TD, parallax 3240.679″", () => {

@@ -1,6 +1,6 @@
 import fc from "fast-check";
 import { beforeAll, describe, expect, test } from "vitest";
-import { type PairName, allPairs } from "../../src/bodies/pair.ts";
+import { allPairs, type PairName } from "../../src/bodies/pair.ts";
 import { type Ephemeris, openSources } from "../../src/ephemeris/open-sources.ts";
 import type { ApsidaryError } from "../../src/error.ts";
 import { mergedPassages } from "../../src/passages/merged-passages.ts";
@@ -77,15 +77,14 @@ describe("passages", () => {
     expect(found.map((row) => row.slice(1, 3))).toEqual([
       ["periapsis", "secondary"],
       ["apoapsis", "secondary"],
-      ["periapsis", found[2]?.[2]],
+      ["periapsis", "principal"],
       ["apoapsis", "secondary"],
-      ["periapsis", found[4]?.[2]],
+      ["periapsis", "secondary"],
     ]);
     expect(found[0]?.[0]?.slice(0, 4)).toBe("1965");
     expect(found[1]?.[0]?.slice(0, 4)).toBe("1968");
     expect(found.slice(2).map((row) => row[0])).toEqual(["2042-09-03", "2049-10-31", "2050-06-29"]);
     expect(found.map((row) => row[3]).filter((term) => term?.startsWith("local"))).toHaveLength(4);
-    expect([found[2]?.[2], found[4]?.[2]].sort()).toEqual(["principal", "secondary"]);
   });
 
   test("of Neptune about the barycentre: one extremum near 2045.6", () => {
@@ -104,8 +103,8 @@ describe("passages", () => {
 
   test("have no rank where no source reaches half a period away", async () => {
     const kernel = await openSources({ engine: false });
-    const query = { from: "2050-01-01", to: "2051-01-01" };
-    expect([...passages(kernel, "neptune-sun", query)].map((p) => p.rank)).toEqual([null]);
+    const query = { from: "2047-01-01", to: "2048-01-01" };
+    expect([...passages(kernel, "saturn-sun", query)].map((p) => p.rank)).toEqual([null]);
   });
 
   test("merge by time over several pairs", () => {
@@ -123,14 +122,18 @@ describe("passages", () => {
         const it = all[i] as Passage;
         expect(nextPassage(ephemeris, "moon-earth", it)).toEqual(it);
         expect(previousPassage(ephemeris, "moon-earth", it)).toEqual(all[i - 1]);
-        expect(nextPassage(ephemeris, "moon-earth", it, it.kind === "periapsis" ? "apoapsis" : "periapsis")).toEqual(all[i + 1]);
+        expect(nextPassage(ephemeris, "moon-earth", it, it.kind === "periapsis" ? "apoapsis" : "periapsis")).toEqual(
+          all[i + 1],
+        );
       }),
       { numRuns: 15 },
     );
   });
 
   test("can be asked for by kind and by rank", () => {
-    expect(new Set(list("earth-sun", 0, 5 * YEAR, { kind: "apoapsis" }).map((p) => p.kind))).toEqual(new Set(["apoapsis"]));
+    expect(new Set(list("earth-sun", 0, 5 * YEAR, { kind: "apoapsis" }).map((p) => p.kind))).toEqual(
+      new Set(["apoapsis"]),
+    );
     expect(list("neptune-sun", -40 * YEAR, 60 * YEAR, { rank: "principal" }).length).toBeLessThan(5);
   });
 
