@@ -27,7 +27,8 @@ export function findDe405(): string | null {
 
 /**
  * Gives the path of DE405's table, after downloading Debian's package `casacore-data-jpl-de405` (9 MB) and unpacking it into the
- * project's cache where the table is not on this machine. Needs `apt-get` and `dpkg`, no privileges.
+ * project's cache where the table is not on this machine. Needs `apt-get` and `dpkg`; privileges only where
+ * apt's lists must be fetched first.
  *
  * @throws Error where the download fails
  */
@@ -35,8 +36,14 @@ export function fetchDe405(): string {
   const found = findDe405();
   if (found) return found;
   mkdirSync(CACHE, { recursive: true });
+  const apt = (...args: string[]) => execFileSync("apt-get", args, { cwd: CACHE, stdio: ["ignore", "ignore", "pipe"] });
   try {
-    execFileSync("apt-get", ["download", PACKAGE], { cwd: CACHE, stdio: ["ignore", "ignore", "inherit"] });
+    try {
+      apt("download", PACKAGE);
+    } catch {
+      apt("update", "-q"); // on a fresh machine apt has no lists yet
+      apt("download", PACKAGE);
+    }
     const archive = readdirSync(CACHE).find((name) => name.startsWith(PACKAGE) && name.endsWith(".deb"));
     if (!archive) throw new Error("apt-get left no package behind");
     execFileSync("dpkg", ["-x", archive, "."], { cwd: CACHE, stdio: ["ignore", "ignore", "inherit"] });
