@@ -53,7 +53,7 @@ export function compareCentres(
         distanceKm: at && rounded(at.distanceKm, 3),
         laterHours: at && first && rounded((at.tdbSeconds - first.tdbSeconds) / 3600, 7),
         fartherKm: at && first && rounded(at.distanceKm - first.distanceKm, 3),
-        source: at && at.source,
+        source: at ? at.source : null,
       }),
     ),
   );
