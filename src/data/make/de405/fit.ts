@@ -24,7 +24,7 @@ export interface Fitter {
  * @param weight  of velocities against positions
  *
  * Method: X X Newhall, *Numerical representation of planetary ephemerides*, Celestial Mechanics 45 (1989) 305, who
- * took the weight 0.4.
+ * took the weight 0.4; 0.1 gives slightly smaller errors of velocity here.
  */
 export function makeFitter(seconds: number, n: number, weight = 0.1): Fitter {
   const points = 3 * n + 1;
@@ -137,7 +137,7 @@ export function fitError(
     const s = (2 * i) / checks - 1;
     path(from, (seconds * i) / checks, truth);
     got.fill(0);
-    for (let axis = 0; axis < 3; axis++) addChebyshev(fit, axis * n, n, s, 2 / seconds, 1, got, axis, 3, 1);
+    addChebyshev(fit, 0, n, s, 2 / seconds, 1, 1, got, 0);
     const off = (k: number) => (got[k] as number) - (truth[k] as number);
     position = Math.max(position, Math.hypot(off(0), off(1), off(2)));
     velocity = Math.max(velocity, Math.hypot(off(3), off(4), off(5)));

@@ -62,8 +62,6 @@ export function readTable(path: string): TableReader {
     const s = (2 * (from - part * partSeconds + offset)) / partSeconds - 1;
     const first = Math.floor(part / parts) * ROW_DOUBLES + start + (part % parts) * 3 * n;
     out.fill(0, 0, 6);
-    for (let axis = 0; axis < 3; axis++) {
-      addChebyshev(words, first + axis * n, n, s, 2 / partSeconds, 1, out, axis, 3, 1);
-    }
+    addChebyshev(words, first, n, s, 2 / partSeconds, 1, 1, out, 0);
   };
 }
