@@ -183,7 +183,7 @@ function distance(km: number): string {
 
 /** Two significant digits, no exponent. */
 function digits(value: number): string {
-  if (value < 0.0005) return "0.000";
+  if (value < 0.001) return "< 0.001";
   return value >= 10 ? value.toFixed(0) : Number(value.toPrecision(2)).toString();
 }
 
