@@ -20,3 +20,7 @@ export { type Range, rangeAt } from "./passages/range-at.ts";
 export { rangeTrack, type TrackedRange, type TrackQuery } from "./passages/range-track.ts";
 export type { SourceChoice } from "./passages/timeline-for.ts";
 export { type PassageRow, toRow } from "./passages/to-row.ts";
+export { builtInLeapSeconds, type LeapSecondList, parseLeapSeconds } from "./time/leap-seconds.ts";
+export { dateTimeOfMoment as dateTimeOf, type TimeScales, utcOfMoment as utcOf } from "./time/of-moment.ts";
+export { type Moment, tdbOf } from "./time/tdb-of.ts";
+export type { Utc, UtcBasis } from "./time/utc-of.ts";
