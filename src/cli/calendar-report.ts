@@ -5,6 +5,7 @@ import { printedHalfWidth } from "../report/half-width.ts";
 import { printedTime, roundedClock } from "../report/printed-time.ts";
 import { printedUnit } from "../report/printed-unit.ts";
 import { textTable } from "../report/text-table.ts";
+import { wrapped } from "../report/wrapped.ts";
 import { cautionsOf } from "./cautions.ts";
 import { footOf } from "./foot.ts";
 import type { Provenance } from "./provenance.ts";
@@ -49,8 +50,8 @@ export function* calendarReport(
   yield* textTable(COLUMNS, watched());
   yield "\nTimes are printed to the minute, hour (h), day, month or year that their uncertainty allows.\n";
   if (predicted) yield "Leap seconds that are not yet announced are not counted; the uncertainty includes them.\n";
-  for (const note of notes) yield `${note}\n`;
-  yield* footOf(made, byDeltaT);
+  for (const note of notes) yield wrapped(note, 100, "  ");
+  yield footOf(made, { deltaT: byDeltaT, zones: true });
 }
 
 function bodyOf({ pair }: PassageRow): string {

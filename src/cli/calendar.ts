@@ -12,8 +12,8 @@ export function addCalendar(program: Command): void {
     .command("calendar")
     .summary("print a year's passages of the Earth, the Moon and the planets in local time")
     .description(
-      "Prints the passages of the Earth, the Moon and the planets in one year of local time, each to the unit (minute, hour,\n" +
-        "day …) that its uncertainty defends.",
+      "Prints the passages of the Earth, the Moon and the planets in one year of local time, each to the\n" +
+        "unit (minute, hour, day …) that its uncertainty defends.",
     )
     .argument("<year>", "the local year, such as 2027, or next")
     .option(

@@ -31,8 +31,6 @@ export async function openDestination(path: string | undefined): Promise<Destina
 }
 
 function standardOutput(): Destination {
-  // A failed write also ends in an `error` event, which would end the process with a stack.
-  process.stdout.on("error", () => {});
   return {
     write: (text) =>
       new Promise((done, failed) => {
@@ -84,6 +82,9 @@ async function wholeFile(given: string): Promise<Destination> {
 async function writable(given: string): Promise<{ path: string; mode: number | null }> {
   if (given === "")
     throw new ApsidaryError("unwritable", '--out "" names no file; leave --out away for standard output.');
+  if (/[/\\]$/.test(given)) {
+    throw new ApsidaryError("unwritable", `--out ${shown(given)} names a directory; name a file in it.`);
+  }
   const path = resolve(given);
   const found = await stat(path).catch(() => null);
   if (!found) return { path, mode: null };

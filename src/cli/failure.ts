@@ -45,8 +45,6 @@ function argumentFault({ code, message }: CommanderError): string {
   const near = /Did you mean ([^?]*)\?/.exec(message)?.[1];
   const meant = near ? `; did you mean ${near}?` : ".";
   switch (code) {
-    case "commander.unknownCommand":
-      return `there is no command ${shown(named)}${meant}`;
     case "commander.unknownOption":
       return `there is no option ${shown(named)} here${meant}`;
     case "commander.optionMissingArgument":

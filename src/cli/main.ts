@@ -1,20 +1,31 @@
 import { ApsidaryError } from "../error.ts";
+import { nearestName } from "../nearest-name.ts";
+import { shown } from "./choice-of.ts";
 import { tellFailure } from "./failure.ts";
 import { makeProgram } from "./program.ts";
 
 process.exitCode = await main(process.argv.slice(2));
 
 /** Runs the command. @param words the arguments after its name @returns the exit status */
-async function main(words: string[]): Promise<number> {
-  process.stderr.on("error", () => {}); // a reader of messages who has gone is no failure
+async function main(words: readonly string[]): Promise<number> {
+  // A reader who has gone is no failure; answers learn of it, and of a full disk, from each write.
+  process.stdout.on("error", () => {});
+  process.stderr.on("error", () => {});
   const program = makeProgram();
-  const command = program.commands.find((candidate) => candidate.name() === words[0])?.name() ?? "";
+  const names = program.commands.map((command) => command.name());
+  // `help COMMAND` is `COMMAND --help`
+  const [first, ...others] = words[0] === "help" ? [...words.slice(1, 2), "--help"] : words;
+  const command = names.find((name) => name === first) ?? "";
   try {
-    if (words.length === 0) {
-      const names = program.commands.map((candidate) => candidate.name()).join(", ");
-      throw new ApsidaryError("bad-input", `say what to do: ${names}. apsidary --help tells more.`);
+    if (first === undefined) {
+      throw new ApsidaryError("bad-input", `say what to do: ${names.join(", ")}. See: apsidary --help`);
     }
-    await program.parseAsync(words, { from: "user" });
+    if (!command && !first.startsWith("-")) {
+      const near = nearestName(first, names);
+      const meant = near ? `; did you mean ${near}?` : ".";
+      throw new ApsidaryError("bad-input", `there is no command ${shown(first)}${meant} See: apsidary --help`);
+    }
+    await program.parseAsync([first, ...others], { from: "user" });
     return 0;
   } catch (error) {
     return tellFailure(error, command);

@@ -4,6 +4,7 @@ import { durationText } from "../report/duration-text.ts";
 import { groupedNumber } from "../report/grouped-number.ts";
 import { printedHalfWidth } from "../report/half-width.ts";
 import { textTable } from "../report/text-table.ts";
+import { wrapped } from "../report/wrapped.ts";
 import { cautionsOf } from "./cautions.ts";
 import { footOf } from "./foot.ts";
 import { printedUtc } from "./printed-utc.ts";
@@ -27,7 +28,7 @@ const COLUMNS: readonly Column<PassageRow>[] = [
 
 /** What the marks mean, in the order in which they stand. */
 const MARKS = {
-  secondary: "a more extreme passage of the same kind lies within half a period: no apsis of the orbit",
+  secondary: "a more extreme one of its kind lies within half a period; it is no apsis of the orbit",
   "rank unknown": "the sources end too near to tell whether it is principal or secondary",
   uncertain: "the source's error could merge it with its neighbour",
   UT: "before 1972 times are UT1, reckoned with ΔT",
@@ -35,6 +36,7 @@ const MARKS = {
   assumed: "a kernel of unknown accuracy, taken to be as good as the built-in one",
 } as const;
 type Mark = keyof typeof MARKS;
+const MARK_NAMES = Object.keys(MARKS) as readonly Mark[];
 
 /**
  * Writes the passages as a report for people, line by line: a title, a table, and a foot that explains what stands in it.
@@ -63,15 +65,14 @@ export function* passagesReport(
   };
   yield `${title}\n\n`;
   yield* textTable(COLUMNS, watched());
-  yield "\n";
-  if (count === 0) yield "No passage in this span.\n";
-  for (const mark of Object.keys(MARKS) as Mark[]) if (marks.has(mark)) yield `${mark}: ${MARKS[mark]}.\n`;
+  yield count === 0 ? "No passage in this span.\n" : "\n";
+  for (const mark of MARK_NAMES) if (marks.has(mark)) yield wrapped(`${mark}: ${MARKS[mark]}.`, 100, "  ");
   if (count > 0) {
-    yield 'Times are rounded to what is known; "known to" and ± are half-widths that at least 95 % of such passages keep.\n';
+    yield '"known to" and ± are half-widths that at least 95 % of such passages keep; no time is printed finer.\n';
     yield "Distances are geometric, from centre to centre at one instant.\n";
   }
-  for (const note of notes) yield `${note}\n`;
-  yield* footOf(made, marks.has("UT"));
+  for (const note of notes) yield wrapped(note, 100, "  ");
+  yield footOf(made, { deltaT: marks.has("UT"), zones: false });
 }
 
 function shortTerm(row: PassageRow): string {

@@ -17,8 +17,8 @@ export function addPassages(program: Command): void {
     .command("passages")
     .summary("list the passages of one or more pairs in a span of time")
     .description(
-      "Lists every passage through a least or a greatest distance in a span of time, in order, each with its uncertainty\n" +
-        "and the source that supplied it.",
+      "Lists every passage through a least or a greatest distance in a span of time, in order, each\n" +
+        "with its uncertainty and the source that supplied it.",
     )
     .argument("<pairs...>", "one or more pairs, such as moon-earth,earth-sun")
     .option("--from <when>", "beginning, included: ISO 8601 or a bare year; UTC unless an offset is given")

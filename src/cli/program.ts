@@ -14,7 +14,7 @@ export function makeProgram(): Command {
     )
     .version(version, "--version", "print the version")
     .helpOption("--help", "print this help")
-    .helpCommand("help [command]", "print the help of a command")
+    .helpCommand(false)
     .configureOutput({ outputError: () => {}, getOutHelpWidth: () => 100, getErrHelpWidth: () => 100 })
     .exitOverride();
   program.addHelpText(
@@ -27,8 +27,8 @@ Examples:
   apsidary passages --help                             all options, and which pairs there are
 
 Answers go to standard output, everything else to standard error.
-Exit status: 0 done (no rows is an answer as well); 2 the input cannot be used, or a file cannot be read or
-written, and nothing was written; 70 a defect of the program itself.`,
+Exit status: 0 done (no rows is an answer as well); 2 the input cannot be used, or a file cannot be
+read or written, and nothing was written; 70 a defect of the program itself.`,
   );
   addPassages(program);
   addRange(program);

@@ -5,6 +5,7 @@ import type { Accuracy } from "../ephemeris/source.ts";
 import type { Column } from "../report/column.ts";
 import { printedHalfWidth } from "../report/half-width.ts";
 import { textTable } from "../report/text-table.ts";
+import { wrapped } from "../report/wrapped.ts";
 import { cautionsOf } from "./cautions.ts";
 import { footOf } from "./foot.ts";
 import type { Provenance } from "./provenance.ts";
@@ -47,11 +48,11 @@ export function* rangeReport(
   };
   yield `${title}\n\n`;
   yield* textTable(columnsFor(pair, ephemeris), watched());
-  yield "\nDistances are geometric, from centre to centre at one instant, printed to the place of their uncertainty.\n";
+  yield "\nDistances are geometric, from centre to centre at one instant, to the place of their uncertainty.\n";
   yield "share: 0 at the periapsis, 1 at the apoapsis on either side, by distance.\n";
   if (before1972) yield "Before 1972 times are UT1, reckoned with ΔT.\n";
-  for (const note of cautionsOf({ targetPoint: pair.target, centrePoint: pair.centre })) yield `${note}\n`;
-  yield* footOf(made, before1972);
+  for (const note of cautionsOf({ targetPoint: pair.target, centrePoint: pair.centre })) yield wrapped(note, 100, "  ");
+  yield footOf(made, { deltaT: before1972, zones: false });
 }
 
 function columnsFor(pair: Pair, ephemeris: Ephemeris): Column<RangeRow>[] {
@@ -71,10 +72,20 @@ function columnsFor(pair: Pair, ephemeris: Ephemeris): Column<RangeRow>[] {
       values: (row) => row.rangeRateKmPerDay,
       digits: (row) => printedHalfWidth((accuracyOf(row)?.rangeRateKmS ?? 0) * DAY_SECONDS).digits,
     },
-    { title: "acceleration", unit: "km/d²", values: (row) => row.rangeAccelerationKmPerDay2, digits: 1 },
+    {
+      title: "acceleration",
+      unit: "km/d²",
+      values: (row) => row.rangeAccelerationKmPerDay2,
+      digits: (row) => fourFigures(row.rangeAccelerationKmPerDay2),
+    },
     { title: "share", unit: "", values: (row) => row.share, digits: 4 },
     { title: "source", unit: "", values: (row) => row.source, digits: 0 },
   ];
+}
+
+/** Decimals that show four figures, three decimals at most. */
+function fourFigures(value: number): number {
+  return Math.min(3, Math.max(0, 3 - Math.floor(Math.log10(Math.abs(value)))));
 }
 
 function isBefore1972({ utc }: RangeRow): boolean {

@@ -15,8 +15,8 @@ export function addRange(program: Command): void {
     .command("range")
     .summary("tell the distance of a pair at equal steps of time")
     .description(
-      "Tells the distance of a pair at equal steps of time, with its rate, its acceleration, and its share of the way from\n" +
-        "the periapsis (0) to the apoapsis (1) on either side.",
+      "Tells the distance of a pair at equal steps of time, with its rate, its acceleration, and its\n" +
+        "share of the way from the periapsis (0) to the apoapsis (1) on either side.",
     )
     .argument("<pair>", "the pair, such as moon-earth")
     .option("--from <when>", "first row: ISO 8601 or a bare year; UTC unless an offset is given")

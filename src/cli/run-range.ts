@@ -56,14 +56,20 @@ export async function runRange(word: string, options: RangeOptions): Promise<voi
   const pieces = await answerPieces<RangeRow>(format, {
     head: { schema: "apsidary/range/1", made, pair: pair.name },
     names: NAMES,
-    rows: rowsOf(watched, ephemeris),
+    rows: rowsOf(watched, ephemeris, to),
     report: (rows) => rangeReport(title, pair, rows, ephemeris, made),
   });
   await writeAnswer(pieces, options.out);
 }
 
-function* rowsOf(track: Iterable<TrackedRange>, ephemeris: Ephemeris): Generator<RangeRow, void, undefined> {
+function* rowsOf(
+  track: Iterable<TrackedRange>,
+  ephemeris: Ephemeris,
+  to: number,
+): Generator<RangeRow, void, undefined> {
   for (const { tdbSeconds, distanceKm, rangeRateKmPerDay, rangeAccelerationKmPerDay2, share, source } of track) {
+    // an answer tells milliseconds: a row that would bear the time of the end is not before it
+    if (rounded(tdbSeconds, 3) >= rounded(to, 3)) return;
     yield {
       utc: utcText(tdbSeconds, 3, ephemeris.leapSeconds),
       tdbSeconds: rounded(tdbSeconds, 3),

@@ -1,8 +1,7 @@
 import { allPairs } from "../bodies/pair.ts";
 import type { Ephemeris } from "../ephemeris/open-sources.ts";
 import type { Source } from "../ephemeris/source.ts";
-import type { Column } from "../report/column.ts";
-import { textTable } from "../report/text-table.ts";
+import { wrapped } from "../report/wrapped.ts";
 import { formatTdb } from "../time/format-tdb.ts";
 import { openFor } from "./open-for.ts";
 import type { SharedOptions } from "./options.ts";
@@ -16,18 +15,6 @@ export async function runSources(options: SharedOptions): Promise<void> {
   await writeAnswer(told(ephemeris, checksums), options.out);
 }
 
-interface Supplied {
-  readonly pairs: string;
-  readonly from: string;
-  readonly to: string;
-}
-
-const COLUMNS: readonly Column<Supplied>[] = [
-  { title: "  from (TDB)", unit: "", values: (row) => `  ${row.from}`, digits: 0 },
-  { title: "to (TDB)", unit: "", values: (row) => row.to, digits: 0 },
-  { title: "pairs", unit: "", values: (row) => row.pairs, digits: 0 },
-];
-
 function* told(
   ephemeris: Ephemeris,
   checksums: ReadonlyMap<Source, string | null>,
@@ -36,24 +23,23 @@ function* told(
     const checksum = checksums.get(source);
     yield `${source.id} (${source.kind}): ${source.title}\n`;
     if (checksum) yield `  sha256 ${checksum}\n`;
-    yield* textTable(COLUMNS, suppliedBy(source));
-    yield `${source.describe()}\n\n`;
+    for (const line of suppliedBy(source)) yield wrapped(line, 100, "    ", "  ");
+    const description = source.describe();
+    if (description && description !== source.title) yield `${description}\n`;
+    yield "\n";
   }
   const { leapSeconds } = ephemeris;
   yield `Leap seconds: ${leapSeconds.source}, known until ${leapSeconds.expiresUtc}.\n`;
 }
 
 /** Pairs that are supplied in the same span stand together. */
-function suppliedBy(source: Source): Supplied[] {
-  const rows = new Map<string, { from: string; to: string; pairs: string[] }>();
+function suppliedBy(source: Source): string[] {
+  const pairsOf = new Map<string, string[]>();
   for (const pair of allPairs()) {
-    for (const span of source.spans(pair)) {
-      const from = formatTdb(span.from, 0);
-      const to = formatTdb(span.to, 0);
-      const row = rows.get(from + to) ?? { from, to, pairs: [] };
-      row.pairs.push(pair.name);
-      rows.set(from + to, row);
+    for (const { from, to } of source.spans(pair)) {
+      const span = `${formatTdb(from, 0)} to ${formatTdb(to, 0)} TDB`;
+      pairsOf.set(span, [...(pairsOf.get(span) ?? []), pair.name]);
     }
   }
-  return [...rows.values()].map(({ from, to, pairs }) => ({ from, to, pairs: pairs.join(" ") }));
+  return [...pairsOf].map(([span, pairs]) => `${span}: ${pairs.join(" ")}`);
 }

@@ -7,7 +7,8 @@ export function addSources(program: Command): void {
     .command("sources")
     .summary("tell what the sources hold: spans, segments, centres, targets, comments")
     .description(
-      "Tells what the sources hold, the best first: which pairs they supply and when, and of kernels the segments and comments.",
+      "Tells what the sources hold, the best first: which pairs they supply and when, and of kernels the\n" +
+        "segments and comments.",
     );
   addAnswerOptions(addDataFiles(command), ["text"])
     .addHelpText(

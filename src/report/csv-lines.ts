@@ -5,6 +5,8 @@ import Papa from "papaparse";
  * Years outside 0 … 9999 begin with a sign in ISO 8601 and are let through.
  */
 const FORMULA = /^(?![+-]\d{6}-\d\d-\d\dT)[=+\-@\t\r]/;
+/** Rows that are written at a time. */
+const BLOCK = 100;
 
 /**
  * Writes rows as CSV after RFC 4180: a header of names, then a line for each row, ended by CR LF; `null` is empty.
@@ -12,16 +14,23 @@ const FORMULA = /^(?![+-]\d{6}-\d\d-\d\dT)[=+\-@\t\r]/;
  * Text that a spreadsheet would run as a formula gets an apostrophe before it.
  *
  * @param names the columns: names of the rows' fields, in order; the fields hold text, numbers or `null`
- * @param rows  taken one at a time
+ * @param rows  taken some at a time
+ * @returns pieces of one or more lines
  */
 export function* csvLines<Row extends object>(
   names: readonly (keyof Row & string)[],
   rows: Iterable<Row>,
 ): Generator<string, void, undefined> {
-  yield csvLine(names);
-  for (const row of rows) yield csvLine(names.map((name) => row[name]));
+  let block: unknown[][] = [[...names]];
+  for (const row of rows) {
+    block.push(names.map((name) => row[name]));
+    if (block.length < BLOCK) continue;
+    yield csv(block);
+    block = [];
+  }
+  if (block.length > 0) yield csv(block);
 }
 
-function csvLine(cells: readonly unknown[]): string {
-  return `${Papa.unparse([[...cells]], { escapeFormulae: FORMULA, newline: "\r\n" })}\r\n`;
+function csv(lines: unknown[][]): string {
+  return `${Papa.unparse(lines, { escapeFormulae: FORMULA, newline: "\r\n" })}\r\n`;
 }

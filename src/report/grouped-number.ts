@@ -10,7 +10,8 @@ export function groupedNumber(value: number, digits: number): string {
   const plain = digits > 0 ? Math.abs(value).toFixed(digits) : text;
   const point = plain.indexOf(".");
   const whole = point < 0 ? plain : plain.slice(0, point);
-  const grouped = whole.replace(/\B(?=(\d{3})+$)/g, " ");
+  let grouped = whole.slice(0, whole.length % 3 || 3);
+  for (let i = grouped.length; i < whole.length; i += 3) grouped += ` ${whole.slice(i, i + 3)}`;
   const sign = value < 0 && /[1-9]/.test(plain) ? "-" : "";
   return sign + grouped + (point < 0 ? "" : plain.slice(point));
 }

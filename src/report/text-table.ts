@@ -13,7 +13,7 @@ const EMPTY = "-";
  * @param columns   what each column shows
  * @param rows      taken one at a time
  * @param blockRows rows that are measured together
- * @returns lines, each with its line feed; the header alone where there are no rows
+ * @returns lines, each with its line feed; none where there are no rows
  */
 export function* textTable<Row>(
   columns: readonly Column<Row>[],
@@ -51,7 +51,7 @@ export function* textTable<Row>(
     block.push(columns.map((column) => cellText(column, row)));
     if (block.length === blockRows) yield* flush();
   }
-  if (block.length > 0 || !begun) yield* flush();
+  if (block.length > 0) yield* flush();
 }
 
 interface Layout {
