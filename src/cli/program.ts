@@ -1,5 +1,6 @@
 import { Command } from "commander";
 import { addCalendar } from "./calendar.ts";
+import { addDrift } from "./drift-command.ts";
 import { addPassages } from "./passages.ts";
 import { addRange } from "./range.ts";
 import { addSources } from "./sources.ts";
@@ -33,6 +34,7 @@ read or written, and nothing was written; 70 a defect of the program itself.`,
   addPassages(program);
   addRange(program);
   addCalendar(program);
+  addDrift(program);
   addSources(program);
   return program;
 }

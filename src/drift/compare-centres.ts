@@ -17,6 +17,7 @@ export interface CentrePassage {
   readonly laterHours: number | null;
   /** How much farther than at the first pair's passage. */
   readonly fartherKm: number | null;
+  readonly timeUncertaintySeconds: number | null;
   /** Id of the source. */
   readonly source: string | null;
 }
@@ -53,6 +54,7 @@ export function compareCentres(
         distanceKm: at && rounded(at.distanceKm, 3),
         laterHours: at && first && rounded((at.tdbSeconds - first.tdbSeconds) / 3600, 7),
         fartherKm: at && first && rounded(at.distanceKm - first.distanceKm, 3),
+        timeUncertaintySeconds: at && Math.ceil(at.timeUncertaintySeconds * 1e3) / 1e3,
         source: at ? at.source : null,
       }),
     ),
