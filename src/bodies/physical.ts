@@ -7,32 +7,38 @@ export interface PhysicalBody {
   readonly gmKm3S2: number;
   /** Equatorial radius, km. */
   readonly equatorialRadiusKm: number;
+  /** What radius that is, and whose. */
+  readonly radiusSource: string;
 }
+
+const EQUATOR = "equatorial radius, IAU WGCCRE 2015";
+const ONE_BAR = "equatorial radius at 1 bar, IAU WGCCRE 2015";
 
 /**
  * Gravitational parameters and equatorial radii, by body.
  *
  * GM: the values of JPL DE440 (R. S. Park et al., Astron. J. 161 (2021) 105) and, for the planets without their moons,
  * of the satellite ephemerides of the same time; rounded, from memory. Radii: B. A. Archinal et al., *Report of the IAU
- * Working Group on Cartographic Coordinates and Rotational Elements: 2015*, Celest. Mech. Dyn. Astr. 130 (2018) 22, from
- * memory; Jupiter to Neptune at the level of 1 bar, the Moon its mean radius, the Sun as in IAU 2015 Resolution B3.
+ * Working Group on Cartographic Coordinates and Rotational Elements: 2015*, Celest. Mech. Dyn. Astr. 130 (2018) 22, and
+ * IAU 2015 Resolution B3 for the Sun; from memory.
  */
 export const PHYSICAL_BODIES = {
-  sun: { gmKm3S2: 132_712_440_041.28, equatorialRadiusKm: 695_700 },
-  mercury: { gmKm3S2: 22_031.8686, equatorialRadiusKm: 2440.53 },
-  venus: { gmKm3S2: 324_858.592, equatorialRadiusKm: 6051.8 },
-  earth: { gmKm3S2: 398_600.4355, equatorialRadiusKm: 6378.1366 },
-  moon: { gmKm3S2: 4902.80012, equatorialRadiusKm: 1737.4 },
-  mars: { gmKm3S2: 42_828.3736, equatorialRadiusKm: 3396.19 },
-  jupiter: { gmKm3S2: 126_686_534.2, equatorialRadiusKm: 71_492 },
-  saturn: { gmKm3S2: 37_931_206.2, equatorialRadiusKm: 60_268 },
-  uranus: { gmKm3S2: 5_793_951.3, equatorialRadiusKm: 25_559 },
-  neptune: { gmKm3S2: 6_835_103.1, equatorialRadiusKm: 24_764 },
-  pluto: { gmKm3S2: 869.6, equatorialRadiusKm: 1188.3 },
+  sun: {
+    gmKm3S2: 132_712_440_041.28,
+    equatorialRadiusKm: 695_700,
+    radiusSource: "nominal radius, IAU 2015 Resolution B3",
+  },
+  mercury: { gmKm3S2: 22_031.8686, equatorialRadiusKm: 2440.53, radiusSource: EQUATOR },
+  venus: { gmKm3S2: 324_858.592, equatorialRadiusKm: 6051.8, radiusSource: EQUATOR },
+  earth: { gmKm3S2: 398_600.4355, equatorialRadiusKm: 6378.1366, radiusSource: EQUATOR },
+  moon: { gmKm3S2: 4902.80012, equatorialRadiusKm: 1737.4, radiusSource: "mean radius, IAU WGCCRE 2015" },
+  mars: { gmKm3S2: 42_828.3736, equatorialRadiusKm: 3396.19, radiusSource: EQUATOR },
+  jupiter: { gmKm3S2: 126_686_534.2, equatorialRadiusKm: 71_492, radiusSource: ONE_BAR },
+  saturn: { gmKm3S2: 37_931_206.2, equatorialRadiusKm: 60_268, radiusSource: ONE_BAR },
+  uranus: { gmKm3S2: 5_793_951.3, equatorialRadiusKm: 25_559, radiusSource: ONE_BAR },
+  neptune: { gmKm3S2: 6_835_103.1, equatorialRadiusKm: 24_764, radiusSource: ONE_BAR },
+  pluto: { gmKm3S2: 869.6, equatorialRadiusKm: 1188.3, radiusSource: "mean radius, IAU WGCCRE 2015" },
 } as const satisfies Record<string, PhysicalBody>;
-
-/** What the radii are, for a page that shows heights. */
-export const RADIUS_SOURCE = "equatorial radius, IAU WGCCRE 2015";
 
 /** A body whose mass and size are known here. */
 export type BodyName = keyof typeof PHYSICAL_BODIES;
@@ -51,7 +57,7 @@ export function isBodyName(name: string): name is BodyName {
 export function physicalBody(name: string): PhysicalBody {
   if (isBodyName(name)) return PHYSICAL_BODIES[name];
   const known = Object.keys(PHYSICAL_BODIES);
-  const near = nearestName(name, known);
+  const near = nearestName(String(name), known);
   throw new ApsidaryError(
     "bad-input",
     `unknown body ${JSON.stringify(String(name).slice(0, 60))}${near ? `; did you mean "${near}"?` : "."} ` +
