@@ -21,7 +21,10 @@ export function addPassages(program: Command): void {
         "with its uncertainty and the source that supplied it.",
     )
     .argument("<pairs...>", "one or more pairs, such as moon-earth,earth-sun")
-    .option("--from <when>", "beginning, included: ISO 8601 or a bare year; UTC unless an offset is given")
+    .option(
+      "--from <when>",
+      "beginning, included: ISO 8601 or a bare year; UTC (before 1972 UT1) unless an offset is given",
+    )
     .option("--to <when>", "end, excluded")
     .option("--next <n>", "instead of --to: the first N passages from --from on")
     .option("--kind <kind>", "periapsis | apoapsis | both (default: both)")

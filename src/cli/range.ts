@@ -19,7 +19,7 @@ export function addRange(program: Command): void {
         "share of the way from the periapsis (0) to the apoapsis (1) on either side.",
     )
     .argument("<pair>", "the pair, such as moon-earth")
-    .option("--from <when>", "first row: ISO 8601 or a bare year; UTC unless an offset is given")
+    .option("--from <when>", "first row: ISO 8601 or a bare year; UTC (before 1972 UT1) unless an offset is given")
     .option("--to <when>", "end, excluded")
     .option("--step <time>", "from row to row: a number with s, min, h or d, such as 6h, 30min, 1.5d");
   addAnswerOptions(addSourceOptions(command))

@@ -157,7 +157,8 @@ describe("apsidary passages", () => {
       "--to",
       "2000-02-20",
     );
-    if (text.includes("user:mine.bsp")) expect(text).toContain("assumed: a kernel of unknown accuracy");
+    expect(text).toMatch(/ user:mine\.bsp {2}.*assumed$/m);
+    expect(text).toContain("assumed: a kernel of unknown accuracy");
     expect(text).toContain("Source user:mine.bsp: mine.bsp");
   });
 });

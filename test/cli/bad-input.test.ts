@@ -43,7 +43,7 @@ const YEAR = ["--from", "2026", "--to", "2027"];
 const MOON = ["passages", "moon-earth", ...YEAR];
 
 const CASES: readonly (readonly [what: string, args: readonly string[], says: RegExp])[] = [
-  ["nothing at all", [], /say what to do: passages, range, calendar, sources/],
+  ["nothing at all", [], /say what to do: passages, range, /],
   ["an unknown command", ["passage", "moon-earth"], /no command passage; did you mean passages\?/],
   ["help for an unknown command", ["help", "passage"], /no command passage; did you mean passages\?/],
   ["an unknown option", ["passages", "moon-earth", "--fro", "2026"], /no option --fro here; did you mean --from\?/],
