@@ -8,7 +8,6 @@ export default defineConfig([
     dts: true,
     external: [/^#/],
     target: "es2022",
-    clean: true,
   },
   {
     entry: { cli: "src/cli/main.ts" },

@@ -1,5 +1,8 @@
 /** Where the built-in kernel lies; bundlers know this form and carry the file along as an asset. */
 export const builtInKernel = new URL("../data/de405.bsp", import.meta.url);
+/** Where the files of the series lie. */
+export const planetsSeries = new URL("../data/planets.series.bin", import.meta.url);
+export const moonSeries = new URL("../data/moon.series.bin", import.meta.url);
 
 /** Reads a file from a URL. */
 export async function readBytes(url, signal) {

@@ -74,7 +74,7 @@ export function openKernel(bytes: Uint8Array, identity: KernelIdentity): Source 
       const rows = segments.map(
         (s, i) =>
           `  ${i + 1}: ${pointLabel(s.target)} about ${pointLabel(s.centre)}, type ${s.type}, TDB seconds ${s.from} to ${s.to}, ` +
-          `${s.records} records of ${s.recordSeconds / 86400} d, ${s.coefficients} coefficients`,
+          `${s.records} records of ${Number((s.recordSeconds / 86400).toFixed(3))} d, ${s.coefficients} coefficients`,
       );
       return [
         `${identity.title}: ${daf.idWord}, ${daf.byteOrder}, ${daf.internalName}`,

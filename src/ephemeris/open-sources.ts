@@ -1,8 +1,9 @@
 import { type Pair, type PairName, pairOf } from "../bodies/pair.ts";
 import { ApsidaryError } from "../error.ts";
 import { builtInLeapSeconds, type LeapSecondList, parseLeapSeconds } from "../time/leap-seconds.ts";
-import { openBuiltInKernel } from "./builtin.ts";
+import { openBuiltInKernel, openBuiltInSeries } from "./builtin.ts";
 import { openEngine } from "./engine.ts";
+import type { SeriesBytes } from "./series.ts";
 import type { Source, Span } from "./source.ts";
 import { type KernelAccuracy, openUserKernel } from "./user-kernel.ts";
 
@@ -24,6 +25,8 @@ export interface SourceOptions {
   readonly kernels?: readonly KernelGiven[];
   /** The built-in kernel: where it is, or `false` to do without. */
   readonly builtIn?: boolean | URL | Uint8Array;
+  /** The series for 1000 to 3000: their bytes, or `false` to do without; left out, they are opened where their files are there. */
+  readonly series?: boolean | SeriesBytes;
   /** `false` to do without astronomy-engine. */
   readonly engine?: boolean;
   /** The text of a `leap-seconds.list`, instead of the list that the package carries. */
@@ -51,23 +54,30 @@ export interface Ephemeris {
 /**
  * Opens the sources; the one step that waits. Everything after it is synchronous.
  *
- * Order: tracks, the user's kernels (the last named first), the built-in kernel, astronomy-engine.
+ * Order: tracks, the user's kernels (the last named first), the built-in kernel, the series, astronomy-engine.
  *
- * @param options what to open; left out, the built-in kernel and astronomy-engine
+ * @param options what to open; left out, the built-in kernel, the series and astronomy-engine
  * @throws ApsidaryError `kernel-not-found`, `bad-kernel`, `bad-leap-seconds`, `unreadable`; a source that was asked for and fails is
  *   never stepped over in silence
  */
 export async function openSources(options: SourceOptions = {}): Promise<Ephemeris> {
-  const { kernels = [], builtIn = true, engine = true, signal } = options;
+  const { kernels = [], builtIn = true, series, engine = true, signal } = options;
   const leapSeconds = options.leapSeconds === undefined ? builtInLeapSeconds() : parseLeapSeconds(options.leapSeconds);
-  const [users, own, net] = await Promise.all([
+  const [users, own, theories, net] = await Promise.all([
     Promise.all(kernels.map((given, index) => openUserKernel(given, index, signal))),
     builtIn === false
       ? []
       : openBuiltInKernel(builtIn === true ? undefined : builtIn, signal).then((source) => [source]),
+    series === false ? null : openBuiltInSeries(series, signal),
     engine ? openEngine().then((source) => [source]) : [],
   ]);
-  const sources = Object.freeze([...(options.tracks ?? []), ...users.reverse(), ...own, ...net]);
+  const sources = Object.freeze([
+    ...(options.tracks ?? []),
+    ...users.reverse(),
+    ...own,
+    ...(theories ? [theories] : []),
+    ...net,
+  ]);
   if (sources.length === 0)
     throw new ApsidaryError("bad-option", "no source is open; leave out `builtIn: false` or give a kernel.");
   return Object.freeze({

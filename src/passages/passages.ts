@@ -47,7 +47,7 @@ export function passages(
   if (!(from < to)) {
     throw new ApsidaryError(
       "bad-span",
-      `the span begins ${formatTdb(from)} and ends ${formatTdb(to)} (TDB); its end must come after its beginning.`,
+      `the span begins ${formatTdb(from, 0)} and ends ${formatTdb(to, 0)} (TDB); its end must come after its beginning.`,
     );
   }
   const timeline = timelineFor(ephemeris, pairOf(pair), query.source ?? "auto");
@@ -60,10 +60,10 @@ export function passages(
 
 function requireCovered(timeline: Timeline, from: number, to: number): void {
   if (timeline.covered.some((span) => span.from <= from && to <= span.to)) return;
-  const spans = timeline.covered.map((span) => `${formatTdb(span.from)} to ${formatTdb(span.to)}`).join(", and ");
+  const spans = timeline.covered.map((span) => `${formatTdb(span.from, 0)} to ${formatTdb(span.to, 0)}`).join(", and ");
   throw new ApsidaryError(
     "not-covered",
-    `${formatTdb(from)} to ${formatTdb(to)} is not wholly covered for ${timeline.pair.name}: the sources allowed here span ` +
+    `${formatTdb(from, 0)} to ${formatTdb(to, 0)} is not wholly covered for ${timeline.pair.name}: the sources allowed here span ` +
       `${spans} (TDB). Ask inside that, or allow another source.`,
   );
 }

@@ -39,10 +39,12 @@ export function rangeAt(
   const timeline = timelineFor(ephemeris, pairOf(pair), source);
   const supply = timeline.supplyAt(tdb);
   if (!supply) {
-    const spans = timeline.covered.map((span) => `${formatTdb(span.from)} to ${formatTdb(span.to)}`).join(", and ");
+    const spans = timeline.covered
+      .map((span) => `${formatTdb(span.from, 0)} to ${formatTdb(span.to, 0)}`)
+      .join(", and ");
     throw new ApsidaryError(
       "not-covered",
-      `${formatTdb(tdb)} is not covered for ${timeline.pair.name}: the sources allowed here span ${spans} (TDB).`,
+      `${formatTdb(tdb, 0)} is not covered for ${timeline.pair.name}: the sources allowed here span ${spans} (TDB).`,
     );
   }
   const { range } = supply;

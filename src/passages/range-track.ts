@@ -1,6 +1,7 @@
 import { type Pair, type PairName, pairOf } from "../bodies/pair.ts";
 import type { Ephemeris } from "../ephemeris/open-sources.ts";
 import { ApsidaryError } from "../error.ts";
+import { tdbMinusTt } from "../time/tdb-minus-tt.ts";
 import { type Moment, tdbOf } from "../time/tdb-of.ts";
 import { previousPassage } from "./next-passage.ts";
 import type { Passage } from "./passage.ts";
@@ -49,6 +50,9 @@ export function rangeTrack(
   return track(ephemeris, known, from, to, stepSeconds, source);
 }
 
+/** Seconds within which an instant counts as the end; numbers of this size resolve 10⁻⁷ s. */
+const RESOLUTION = 1e-6;
+
 function* track(
   ephemeris: Ephemeris,
   pair: Pair,
@@ -61,8 +65,12 @@ function* track(
   let before = previousPassage(ephemeris, pair, { tdbSeconds: from }, "both", { source });
   const later = passages(ephemeris, pair, { from: { tdbSeconds: from }, to: { tdbSeconds: end }, source });
   let after: Passage | null = later.next().value ?? null;
-  for (let i = 0; from + i * step < to; i++) {
-    const tdb = from + i * step;
+  // Steps are equal on clocks, that is in TT, from which TDB swings by 2 ms in a year.
+  const start = from - tdbMinusTt(from);
+  for (let i = 0; ; i++) {
+    const tt = start + i * step;
+    const tdb = tt + tdbMinusTt(tt);
+    if (tdb >= to - RESOLUTION) return;
     while (after && after.tdbSeconds <= tdb) {
       before = after;
       after = later.next().value ?? null;

@@ -53,8 +53,8 @@ export interface Timeline {
  * Where two sources meet, their instants differ (the engine by hours), so a cut by time alone would lose a passage that
  * each puts on the other's side, or give it twice. Instead the better source's first extremum past the seam is paired
  * with the other source's nearest of the same kind, beyond the seam if need be; the other source's list ends (or
- * begins) next to that one. So a passage that both know comes from the better source, one that only the other source
- * puts in reach is kept, and kinds go on alternating.
+ * begins) next to that one. So a passage that both know comes from the better source, one that the other source puts
+ * just across the seam is kept, and kinds go on alternating.
  *
  * @param pair    the pair
  * @param sources the sources, the best first
@@ -164,11 +164,29 @@ function seam(pair: Pair, pieces: readonly Piece[], index: number): { leftUntil:
     // The left source could have gone on: the right one is better and begins here.
     const first = firstIn(right, pair);
     const twin = first && nearestOfKind(left.supply, pair, first);
-    return { leftUntil: twin ?? at, rightFrom: at };
+    if (twin === null || twin <= at) return { leftUntil: twin ?? at, rightFrom: at };
+    const stray = extremaIn(left.supply, pair, at, twin - RESOLUTION);
+    const kept = stray.findIndex((it) => it.tdb - at > reachOf(left.supply, pair, it));
+    return { leftUntil: stray[kept]?.tdb ?? twin, rightFrom: at };
   }
   const last = lastIn(left, pair);
   const twin = last && nearestOfKind(right.supply, pair, last);
-  return { leftUntil: at, rightFrom: twin === null ? at : twin + RESOLUTION };
+  if (twin === null || twin >= at) return { leftUntil: at, rightFrom: twin === null ? at : twin + RESOLUTION };
+  const stray = extremaIn(right.supply, pair, twin + RESOLUTION, at).reverse();
+  const dropped = stray.find((it) => at - it.tdb > reachOf(right.supply, pair, it));
+  return { leftUntil: at, rightFrom: (dropped?.tdb ?? twin) + RESOLUTION };
+}
+
+/**
+ * Seconds by which the lesser source may have put an extremum on the wrong side of a seam: three of its half-widths.
+ *
+ * One that lies deeper in the better source's span without a twin there is the lesser source's own invention, as a slow planet's series
+ * makes two extrema where there is none.
+ */
+function reachOf(supply: Supply, pair: Pair, { tdb }: Extremum): number {
+  const measures = new Float64Array(2);
+  supply.range.measure(tdb, measures);
+  return (3 * supply.source.accuracy(pair, tdb).rangeRateKmS) / Math.abs(measures[1] as number);
 }
 
 /** Seconds by which an instant is passed to leave it out; numbers of this size resolve 10⁻⁶ s. */
@@ -192,20 +210,26 @@ function firstIn(piece: Piece, pair: Pair): Extremum | null {
 function lastIn(piece: Piece, pair: Pair): Extremum | null {
   for (let reach = pair.halfPeriodSeconds; ; reach *= 2) {
     const from = Math.max(piece.from, piece.to - reach);
-    const next = scanExtrema(piece.supply.range, piece.supply.span, pair.sampleSeconds, from);
-    let last: Extremum | null = null;
-    for (let found = next(); found && found.tdb < piece.to; found = next()) if (found.tdb >= from) last = found;
-    if (last || from === piece.from) return last;
+    const last = extremaIn(piece.supply, pair, from, piece.to).at(-1);
+    if (last || from === piece.from) return last ?? null;
   }
+}
+
+/** A supply's extrema with `from ≤ t < to`. */
+function extremaIn(supply: Supply, pair: Pair, from: number, to: number): Extremum[] {
+  const next = scanExtrema(supply.range, supply.span, pair.sampleSeconds, from);
+  const list: Extremum[] = [];
+  for (let found = next(); found && found.tdb < to; found = next()) if (found.tdb >= from) list.push(found);
+  return list;
 }
 
 /** The instant of a supply's extremum of the same kind nearest to another source's, within half a period; `null` where there is none. */
 function nearestOfKind(supply: Supply, pair: Pair, twin: Extremum): number | null {
-  const next = scanExtrema(supply.range, supply.span, pair.sampleSeconds, twin.tdb - pair.halfPeriodSeconds);
+  const reach = pair.halfPeriodSeconds;
   let nearest: number | null = null;
-  for (let found = next(); found && found.tdb <= twin.tdb + pair.halfPeriodSeconds; found = next()) {
-    if (found.kind !== twin.kind) continue;
-    if (nearest === null || Math.abs(found.tdb - twin.tdb) < Math.abs(nearest - twin.tdb)) nearest = found.tdb;
+  for (const { kind, tdb } of extremaIn(supply, pair, twin.tdb - reach, twin.tdb + reach)) {
+    if (kind !== twin.kind) continue;
+    if (nearest === null || Math.abs(tdb - twin.tdb) < Math.abs(nearest - twin.tdb)) nearest = tdb;
   }
   return nearest;
 }

@@ -2,6 +2,7 @@ import { AU_KM } from "../bodies/constants.ts";
 import { type PairName, pairOf } from "../bodies/pair.ts";
 import { type ApsisKind, type ApsisRank, termOf } from "../bodies/term.ts";
 import type { AccuracyBasis } from "../ephemeris/source.ts";
+import { rounded } from "../report/rounded.ts";
 import { formatTdb } from "../time/format-tdb.ts";
 import { formatUtc } from "../time/format-utc.ts";
 import type { LeapSecondList } from "../time/leap-seconds.ts";
@@ -54,24 +55,19 @@ export function toRow(passage: Passage, scales?: { readonly leapSeconds: LeapSec
     term: termOf(pair, kind, rank),
     rank,
     existence: passage.existence,
-    tdbSeconds: rounded(tdbSeconds, 1e3),
+    tdbSeconds: rounded(tdbSeconds, 3),
     tdb: formatTdb(tdbSeconds, 3),
     utc: formatUtc(utc, 3),
     utcBasis: utc.basis,
-    distanceKm: rounded(distanceKm, 1e3),
-    distanceAu: rounded(distanceKm / AU_KM, 1e12),
+    distanceKm: rounded(distanceKm, 3),
+    distanceAu: rounded(distanceKm / AU_KM, 12),
     timeUncertaintySeconds: roundedUp(passage.timeUncertaintySeconds),
     distanceUncertaintyKm: roundedUp(passage.distanceUncertaintyKm),
     utcUncertaintySeconds: roundedUp(Math.hypot(passage.timeUncertaintySeconds, utc.uncertaintySeconds)),
-    rangeAccelerationKmPerDay2: rounded(passage.rangeAccelerationKmPerDay2, 1e3),
+    rangeAccelerationKmPerDay2: rounded(passage.rangeAccelerationKmPerDay2, 6),
     source: passage.source,
     accuracyBasis: passage.accuracyBasis,
   });
-}
-
-/** To `1 / parts`; the division by a whole number gives the double nearest to the decimal. */
-function rounded(value: number, parts: number): number {
-  return Math.round(value * parts) / parts;
 }
 
 /** A half-width is never rounded to less than it is. */

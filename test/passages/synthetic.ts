@@ -37,6 +37,7 @@ export function cosineSource(id: string, span: Span, late: number): Source {
     [span],
     (t) => 384400 - 20000 * Math.cos(n * (t - late)),
     (t) => 20000 * n * Math.sin(n * (t - late)),
+    20000 * n * n * Math.abs(late) + 1e-9, // the error that makes it late
   );
 }
 
