@@ -12,7 +12,7 @@ import type { DriftRow } from "./drift-row.ts";
 
 const WIDTH = 720;
 const LEFT = 84;
-const RIGHT = 700;
+const RIGHT = 690;
 const DATES_HEIGHT = 220;
 const BARS_HEIGHT = 240;
 /** Height of a line of text on a narrow screen, where it is largest. */
