@@ -214,6 +214,7 @@ function rowOf(maker: Maker, passage: Passage, extremeOfYear: boolean): Calendar
     printed: printed.text,
     printedUnit: printed.unit,
     notes: Object.freeze(notes),
+    printedUtc: printedLocal(at.toUTC(), row.utcUncertaintySeconds, style).text,
     printedKm: distance.km,
     printedAu: distance.au,
     diameterArcmin:

@@ -34,6 +34,8 @@ export interface CalendarRow extends PassageRow {
   readonly printed: string;
   readonly printedUnit: PrintedUnit;
   readonly notes: readonly NoteCode[];
+  /** UTC (where the basis is `delta-t`, UT1), as it may be printed. */
+  readonly printedUtc: string;
   /** The distance as it may be printed, plain decimals. */
   readonly printedKm: string;
   readonly printedAu: string;
@@ -87,6 +89,7 @@ export const CALENDAR_FIELDS = [
   "printed",
   "printedUnit",
   "notes",
+  "printedUtc",
   "printedKm",
   "printedAu",
   "diameterArcmin",

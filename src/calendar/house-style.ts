@@ -13,7 +13,7 @@ export interface HouseStyle {
   /** Whether months are numbers, as in ISO 8601, or names; for readers only, answers for programs keep numbers. Left out, numbers. */
   readonly months?: "numbers" | "names";
   /** The language of month names, weekdays and numbers for readers, a BCP 47 tag; left out, English names and thin groups of digits. */
-  readonly language?: string;
+  readonly language?: string | null;
 }
 
 /** A house style with nothing left out. */

@@ -1,72 +1,70 @@
-import type { DateTime } from "luxon";
-import type { PassageRow } from "../passages/to-row.ts";
-import type { Column } from "../report/column.ts";
-import { printedHalfWidth } from "../report/half-width.ts";
-import { printedTime, roundedClock } from "../report/printed-time.ts";
-import { printedUnit } from "../report/printed-unit.ts";
-import { textTable } from "../report/text-table.ts";
+import type { CalendarRow } from "../calendar/calendar-row.ts";
+import { calendarText } from "../calendar/calendar-text.ts";
+import type { CompleteStyle } from "../calendar/house-style.ts";
+import { calendarCautions } from "../calendar/note-words.ts";
 import { wrapped } from "../report/wrapped.ts";
 import { cautionsOf } from "./cautions.ts";
 import { footOf } from "./foot.ts";
 import type { Provenance } from "./provenance.ts";
 
-/** A passage and the local time of it. */
-export interface LocalRow {
-  readonly row: PassageRow;
-  readonly at: DateTime<true>;
+/** What a report says besides its rows. */
+export interface CalendarReport {
+  readonly title: string;
+  readonly style: CompleteStyle;
+  /** Whether the zone is UTC itself. */
+  readonly inUtc: boolean;
+  readonly made: Provenance;
 }
 
-const COLUMNS: readonly Column<LocalRow>[] = [
-  { title: "local time", unit: "", values: ({ at, row }) => printedLocal(at, row.utcUncertaintySeconds), digits: 0 },
-  { title: "UTC offset", unit: "", values: ({ at }) => at.toFormat("ZZ"), digits: 0 },
-  { title: "body", unit: "", values: ({ row }) => bodyOf(row), digits: 0 },
-  { title: "passage", unit: "", values: ({ row }) => row.term, digits: 0 },
-  {
-    title: "distance",
-    unit: "km",
-    values: ({ row }) => row.distanceKm,
-    digits: ({ row }) => Math.min(0, printedHalfWidth(row.distanceUncertaintyKm).digits),
-  },
-];
-
-/** Writes a year's passages for people, line by line. */
+/**
+ * Writes a calendar as a report for people, line by line: a title, a block for each body, and a foot that explains what stands in them.
+ *
+ * @param rows in order of time, taken one at a time
+ */
 export function* calendarReport(
-  title: string,
-  rows: Iterable<LocalRow>,
-  made: Provenance,
+  rows: Iterable<CalendarRow>,
+  { title, style, inUtc, made }: CalendarReport,
 ): Generator<string, void, undefined> {
-  const notes = new Set<string>();
-  let predicted = false;
-  let byDeltaT = false;
-  const watched = function* () {
-    for (const local of rows) {
-      for (const note of cautionsOf(local.row)) notes.add(note);
-      predicted ||= local.row.utcBasis === "predicted";
-      byDeltaT ||= local.row.utcBasis === "delta-t";
-      yield local;
-    }
-  };
+  const foot = new CalendarFoot();
   yield `${title}\n\n`;
-  yield* textTable(COLUMNS, watched());
-  yield "\nTimes are printed to the minute, hour (h), day, month or year that their uncertainty allows.\n";
-  if (predicted) yield "Leap seconds that are not yet announced are not counted; the uncertainty includes them.\n";
-  for (const note of notes) yield wrapped(note, 100, "  ");
-  yield footOf(made, { deltaT: byDeltaT, zones: true });
+  yield* calendarText(foot.watch(rows), style, !inUtc);
+  yield foot.count === 0 ? "No passage in this span.\n" : "\n";
+  for (const line of foot.lines(made)) yield wrapped(line);
+  yield footOf(made, { deltaT: foot.byDeltaT, zones: true });
 }
 
-function bodyOf({ pair }: PassageRow): string {
-  const body = pair.slice(0, pair.indexOf("-"));
-  return body.slice(0, 1).toUpperCase() + body.slice(1);
-}
+/** Gathers from passing rows what the foot must explain. */
+export class CalendarFoot {
+  count = 0;
+  byDeltaT = false;
+  #predicted = false;
+  readonly #cautions = new Set<string>();
 
-/** The clock is rounded as an interval of time, so that it stays right where summer time begins or ends within it. */
-function printedLocal(at: DateTime<true>, uncertaintySeconds: number): string {
-  const unit = printedUnit(uncertaintySeconds);
-  const clock = clockOf(at);
-  const rounded = at.plus(roundedClock(clock, unit) - clock);
-  return printedTime(clockOf(rounded), unit) + (unit === "hour" ? "h" : "");
-}
+  *watch(rows: Iterable<CalendarRow>): Generator<CalendarRow, void, undefined> {
+    for (const row of rows) {
+      this.count++;
+      this.#predicted ||= row.utcBasis === "predicted";
+      this.byDeltaT ||= row.utcBasis === "delta-t";
+      for (const caution of [...calendarCautions(row), ...cautionsOf(row)]) this.#cautions.add(caution);
+      yield row;
+    }
+  }
 
-function clockOf(at: DateTime<true>): number {
-  return at.toMillis() + at.offset * 60_000;
+  /** The lines, without the sources. */
+  lines(made: Provenance): string[] {
+    const lines = [...this.#cautions];
+    if (this.count > 0) {
+      lines.push(
+        "Times are printed to the minute, hour, day, month or year, distances to the place, that their uncertainty defends: at least 95 % of " +
+          "the printed values are right. Distances and sizes are geometric, from centre to centre; size and light are against those at the mean distance.",
+      );
+    }
+    if (this.#predicted) {
+      lines.push(
+        "UTC predicted: leap seconds that are not yet announced are not counted; the uncertainty includes them.",
+      );
+    }
+    if (this.byDeltaT) lines.push("Before 1972 times are UT1, by ΔT, in the offset that the zone had from it.");
+    return lines;
+  }
 }

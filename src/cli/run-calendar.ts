@@ -1,72 +1,101 @@
 import { DateTime } from "luxon";
-import { type PairName, pairOf } from "../bodies/pair.ts";
-import type { Ephemeris } from "../ephemeris/open-sources.ts";
+import { pairOf } from "../bodies/pair.ts";
+import { apsisCalendar, CALENDAR_PAIRS, calendarSpan } from "../calendar/apsis-calendar.ts";
+import { calendarRecord, calendarRecordNames } from "../calendar/calendar-record.ts";
+import type { CalendarRow } from "../calendar/calendar-row.ts";
+import { completeStyle, type HouseStyle } from "../calendar/house-style.ts";
 import { ApsidaryError } from "../error.ts";
-import { mergedPassages } from "../passages/merged-passages.ts";
-import type { Passage } from "../passages/passage.ts";
-import { toRow } from "../passages/to-row.ts";
-import { dateTimeOf } from "../time/date-time-of.ts";
-import { tdbOf } from "../time/tdb-of.ts";
+import { asciiText } from "../report/ascii-text.ts";
+import { jsonAnswer } from "../report/json-answer.ts";
+import { jsonLines } from "../report/json-lines.ts";
 import { zoneOf } from "../time/zone-of.ts";
-import type { CalendarOptions } from "./calendar.ts";
-import { calendarReport, type LocalRow } from "./calendar-report.ts";
-import { shown } from "./choice-of.ts";
+import { CALENDAR_FORMATS, type CalendarOptions } from "./calendar.ts";
+import { calendarReport } from "./calendar-report.ts";
+import { choiceOf, shown } from "./choice-of.ts";
 import { openFor } from "./open-for.ts";
 import { sourceChoiceOf } from "./options.ts";
+import { pairsOf } from "./pairs.ts";
 import { provenanceOf } from "./provenance.ts";
 import { writeAnswer } from "./write-answer.ts";
-
-const PAIRS: readonly PairName[] = [
-  "earth-sun",
-  "moon-earth",
-  "mercury-sun",
-  "venus-sun",
-  "mars-sun",
-  "jupiter-sun",
-  "saturn-sun",
-  "uranus-sun",
-  "neptune-sun",
-];
 
 /**
  * Answers `apsidary calendar`.
  *
- * @param given   the year, as given; `next` is the one after this machine's, in the zone
+ * @param given   the years, as given; `next` is the year after this machine's, in the zone
  * @param options the options, as given
  * @throws ApsidaryError for whatever cannot be used, before anything is written
  */
 export async function runCalendar(given: string, options: CalendarOptions): Promise<void> {
+  const format = choiceOf("--format", options.format ?? "text", CALENDAR_FORMATS);
   const source = sourceChoiceOf(options);
-  const zone = options.zone ?? Intl.DateTimeFormat().resolvedOptions().timeZone;
-  const year = given === "next" ? DateTime.now().setZone(zoneOf(zone)).year + 1 : yearOf(given);
-  const begins = startOf(year, zone);
-  const ends = startOf(year + 1, zone);
+  const rank = choiceOf("--rank", options.rank ?? "all", ["principal", "all"]);
+  const [zone, besides] = zonesOf(options);
+  const years = yearsOf(given, zone);
+  const style = completeStyle(styleOf(options, besides));
+  const pairs = options.pairs === undefined ? CALENDAR_PAIRS.map((name) => pairOf(name)) : pairsOf([options.pairs]);
 
   const ephemeris = await openFor(options);
-  const from = tdbOf(begins, ephemeris.leapSeconds);
-  const to = tdbOf(ends, ephemeris.leapSeconds);
-  const pairs = PAIRS.map((name) => pairOf(name));
-  const found = mergedPassages(ephemeris, pairs, { from: { tdbSeconds: from }, to: { tdbSeconds: to }, source });
+  const { first, last, from, to } = calendarSpan(ephemeris, { years, zone });
+  const rows = () => apsisCalendar(ephemeris, { years, zone, pairs, source, rank, style });
+  const drawn = rows(); // refuses what cannot be answered
   const made = await provenanceOf(ephemeris, { pairs, span: { from, to }, source });
-  const title = `Apsis passages of ${year}, ${zone}`;
-  await writeAnswer(calendarReport(title, rowsOf(found, zone, ephemeris), made), options.out);
+  const title = `Apsis passages of ${first === last ? first : `${first} to ${last}`}, ${zone}`;
+  const head = { schema: "apsidary/calendar/1", made, years: [first, last], zone };
+  const inUtc = zoneOf(zone).equals(zoneOf("UTC"));
+
+  const pieces = async (): Promise<Iterable<string>> => {
+    switch (format) {
+      case "json":
+        return jsonAnswer(head, drawn);
+      case "ndjson":
+        return jsonLines(drawn);
+      case "csv": {
+        const { csvLines } = await import("../report/csv-lines.ts"); // brings a library that the other forms do without
+        return csvLines(calendarRecordNames(besides), records(drawn));
+      }
+      default: {
+        const report = calendarReport(drawn, { title, style, inUtc, made });
+        return options.ascii ? inAscii(report) : report;
+      }
+    }
+  };
+  await writeAnswer(await pieces(), options.out);
 }
 
-function* rowsOf(found: Iterable<Passage>, zone: string, ephemeris: Ephemeris): Generator<LocalRow, void, undefined> {
-  for (const passage of found) {
-    const at = dateTimeOf(passage.tdbSeconds, zone, ephemeris.leapSeconds);
-    yield { row: toRow(passage, ephemeris), at };
+function* records(rows: Iterable<CalendarRow>) {
+  for (const row of rows) yield calendarRecord(row);
+}
+
+function* inAscii(pieces: Iterable<string>): Generator<string, void, undefined> {
+  for (const piece of pieces) yield asciiText(piece);
+}
+
+/** The calendar's zone, and those beside it. */
+function zonesOf({ zone }: CalendarOptions): [string, string[]] {
+  const own = Intl.DateTimeFormat().resolvedOptions().timeZone;
+  const [first = own, ...besides] = zone === undefined ? [own] : zone.split(",").map((name) => name.trim());
+  for (const name of [first, ...besides]) zoneOf(name);
+  return [first, besides];
+}
+
+function yearsOf(given: string, zone: string): number | readonly [number, number] {
+  if (given === "next") return DateTime.now().setZone(zoneOf(zone)).year + 1;
+  const [, first, last] = /^(-?\d{4})(?:-(-?\d{4}))?$/.exec(given) ?? [];
+  if (first === undefined) {
+    throw new ApsidaryError(
+      "bad-date",
+      `${shown(given)} is no year; give four digits such as 2027, several such as 2027-2030, or next.`,
+    );
   }
+  return last === undefined ? Number(first) : [Number(first), Number(last)];
 }
 
-function yearOf(given: string): number {
-  const year = /^-?\d{4}$/.test(given) ? Number(given) : Number.NaN;
-  if (year > -9999 && year < 9999) return year;
-  throw new ApsidaryError("bad-date", `${shown(given)} is not a year; give its four digits, such as 2027, or next.`);
-}
-
-function startOf(year: number, zone: string): DateTime<true> {
-  const at = DateTime.fromObject({ year, month: 1, day: 1 }, { zone: zoneOf(zone) });
-  if (!at.isValid) throw new ApsidaryError("bad-date", `the year ${year} cannot be laid out in ${zone}.`);
-  return at;
+function styleOf(options: CalendarOptions, besides: readonly string[]): HouseStyle {
+  return {
+    besides,
+    finest: choiceOf("--unit", options.unit ?? "minute", ["minute", "hour", "day"]),
+    rounding: choiceOf("--rounding", options.rounding ?? "nearest", ["nearest", "cut"]),
+    months: choiceOf("--months", options.months ?? "numbers", ["numbers", "names"]),
+    ...(options.lang === undefined ? {} : { language: options.lang }),
+  };
 }
