@@ -70,7 +70,7 @@ async function evaluations(ephemeris, pair, years) {
       };
     },
   };
-  const alone = await openSources({ builtIn: false, engine: false, tracks: [counted] });
+  const alone = await openSources({ builtIn: false, series: false, engine: false, tracks: [counted] });
   walk(alone, pair, 1); // the seam is searched once
   count = 0;
   return {

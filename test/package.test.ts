@@ -69,7 +69,7 @@ describe("the packed tarball, installed in an empty folder", () => {
       join(folder, "path.mjs"),
       `import { openSources } from "apsidary/node"; import { fileURLToPath } from "node:url";
        const path = fileURLToPath(import.meta.resolve("apsidary/de405.bsp"));
-       const ephemeris = await openSources({ kernels: [path], builtIn: false, engine: false });
+       const ephemeris = await openSources({ kernels: [path], builtIn: false, series: false, engine: false });
        console.log(ephemeris.sources.map((source) => source.id).join());`,
     );
     expect(run("node", ["path.mjs"]).trim()).toBe("user:de405.bsp");

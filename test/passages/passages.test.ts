@@ -102,7 +102,7 @@ describe("passages", () => {
   });
 
   test("have no rank where no source reaches half a period away", async () => {
-    const kernel = await openSources({ engine: false });
+    const kernel = await openSources({ series: false, engine: false });
     const query = { from: "2047-01-01", to: "2048-01-01" };
     expect([...passages(kernel, "saturn-sun", query)].map((p) => p.rank)).toEqual([null]);
   });
