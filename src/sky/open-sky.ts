@@ -1,0 +1,46 @@
+import { engineSpan } from "../ephemeris/engine-accuracy.ts";
+import { engineLibrary } from "../ephemeris/engine-library.ts";
+import { ApsidaryError } from "../error.ts";
+import { apparentLongitudes } from "./apparent-longitude.ts";
+import { type MoonPhase, moonElongation, nearestMoonPhase } from "./moon-phase.ts";
+import { type Solstice, solsticeBefore } from "./solstice.ts";
+
+/** What the sky says at an instant; instants are TDB seconds past J2000, years −1000 to 4000. All methods throw ApsidaryError `not-covered` outside. */
+export interface Sky {
+  /**
+   * Gives the Moon's elongation from the Sun in apparent geocentric ecliptic longitude, degrees from 0 (new Moon) through 180
+   * (full) to below 360; within 6″ from 1900 to 2100.
+   */
+  moonElongationDeg(tdb: number): number;
+  /** Gives the new Moon nearest to an instant; within 12 s from 1900 to 2100. */
+  nearestNewMoon(tdb: number): MoonPhase;
+  /** Gives the full Moon nearest to an instant; within 12 s from 1900 to 2100. */
+  nearestFullMoon(tdb: number): MoonPhase;
+  /**
+   * Gives the last June or December solstice at or before an instant, TDB seconds past J2000; within 100 s from 1900 to 2100.
+   */
+  solsticeBefore(tdb: number, solstice: Solstice): number;
+}
+
+/**
+ * Opens the sky: loads astronomy-engine, after which everything is synchronous.
+ *
+ * @throws ApsidaryError `unreadable` where astronomy-engine cannot be loaded
+ */
+export async function openSky(): Promise<Sky> {
+  const longitudes = apparentLongitudes(await engineLibrary());
+  const span = engineSpan("moon-earth");
+  const covered = (tdb: number): number => {
+    if (tdb >= span.from && tdb <= span.to) return tdb;
+    throw new ApsidaryError(
+      "not-covered",
+      `${tdb} s past J2000 (TDB) is outside what the Sun and Moon are known for: ${span.from} to ${span.to} s, years −1000 to 4000.`,
+    );
+  };
+  return Object.freeze({
+    moonElongationDeg: (tdb: number) => moonElongation(longitudes, covered(tdb)),
+    nearestNewMoon: (tdb: number) => nearestMoonPhase(longitudes, covered(tdb), "new"),
+    nearestFullMoon: (tdb: number) => nearestMoonPhase(longitudes, covered(tdb), "full"),
+    solsticeBefore: (tdb: number, solstice: Solstice) => solsticeBefore(longitudes, covered(tdb), solstice),
+  });
+}
