@@ -84,7 +84,7 @@ const MOON = {
   rangeKm: 0.025,
   driftArcseconds: 0.04,
   secondsPerArcsecond: 1.84,
-  accelerationKmS2: 2e-7,
+  accelerationKmS2: 2.7e-7,
   evectionKmPerArcsecond: 0.036,
 } as const;
 

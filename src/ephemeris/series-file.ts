@@ -46,7 +46,7 @@ const MINUS_BIT = 0x8000;
  *
  * @param bytes the whole file
  * @param title what messages call it
- * @throws ApsidaryError `bad-kernel` where the bytes are not such a file, or are cut short
+ * @throws ApsidaryError `bad-kernel` where the bytes are not such a file, are cut short, or name what is not there
  */
 export function readSeriesFile(bytes: Uint8Array, title: string): ReadonlyMap<string, PoissonSeries> {
   const view = new DataView(bytes.buffer, bytes.byteOffset, bytes.byteLength);
@@ -74,22 +74,31 @@ export function readSeriesFile(bytes: Uint8Array, title: string): ReadonlyMap<st
       const series = readSeries();
       found.set(series.name, series);
     }
-    if (at !== bytes.length) throw new RangeError("bytes left over");
+    if (at !== bytes.length) throw new RangeError("some are left over");
     return found;
   } catch (error) {
-    if (error instanceof RangeError) throw bad(`${bytes.length} bytes are not all that it should hold, or more`);
+    if (error instanceof RangeError) throw bad(`its ${bytes.length} bytes do not fit together (${error.message})`);
     throw error;
+  }
+
+  /** Refuses counts that the rest of the file cannot hold, before memory is taken for them. */
+  function need(count: number, size: number): void {
+    if (count * size > bytes.length - at) throw new RangeError("it is cut short");
   }
 
   function readSeries(): PoissonSeries {
     const name = text(16);
     const [degree, bases, sums, blockCount] = [u32(), u32(), u32(), u32()];
+    need(blockCount, 12);
+    need(bases * degree, 8);
+    need(sums, 4);
     const heads = Array.from({ length: blockCount }, () => {
       const variable = view.getUint8(at);
       const power = view.getUint8(at + 1);
       next(4);
       const wide = u32();
       const narrow = u32();
+      need(wide + narrow, 10);
       return { variable, power, wide, coefficients: new Float64Array(2 * (wide + narrow)), narrow };
     });
     const rates = new Float64Array(bases * degree);
@@ -108,10 +117,15 @@ export function readSeriesFile(bytes: Uint8Array, title: string): ReadonlyMap<st
       const word = u16();
       second[i] = word & ~MINUS_BIT;
       signs[i] = word & MINUS_BIT ? -1 : 1;
+      if (Math.max(first[i] as number, second[i] as number) >= bases + i) throw new RangeError("a sum of later points");
     }
     const blocks = heads.map(({ variable, power, wide, narrow, coefficients }): SeriesBlock => {
       const places = new Uint16Array(wide + narrow);
-      for (let i = 0; i < places.length; i++) places[i] = u16();
+      for (let i = 0; i < places.length; i++) {
+        places[i] = u16();
+        if ((places[i] as number) >= bases + sums) throw new RangeError("a place beyond the points");
+      }
+      if (variable > 2) throw new RangeError("a fourth variable");
       return { variable, power, places, coefficients };
     });
     return { name, degree, rates, bases, first, second, signs, blocks };

@@ -21,13 +21,13 @@ const SUN_OVER_PLANET = {
 const SUN_OVER_PLUTO = 135_200_000;
 
 /** Greatest share of a dropped term in the Sun's place, au. */
-const LEAST_SHARE_AU = 2e-11;
+const LEAST_SHARE_AU = 3e-10;
 
 /**
  * Makes the function that gives the Sun from the solar-system barycentre: minus the planets' places from the Sun, weighted by
  * their masses.
  *
- * Terms whose share lies below 3 m are left out. The Earth stands for the Earth–Moon barycentre (14 m). Pluto, which the
+ * Terms whose share lies below 45 m are left out. The Earth stands for the Earth–Moon barycentre (14 m). Pluto, which the
  * theory does not hold, goes on an ellipse: its share is 44 km, without which the Earth's range rate from the barycentre would be 9 mm/s
  * off. Asteroids are left out.
  *
