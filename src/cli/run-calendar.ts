@@ -1,6 +1,7 @@
 import { DateTime } from "luxon";
 import { pairOf } from "../bodies/pair.ts";
 import { apsisCalendar, CALENDAR_PAIRS, calendarSpan } from "../calendar/apsis-calendar.ts";
+import { calendarEvents } from "../calendar/calendar-events.ts";
 import { calendarRecord, calendarRecordNames } from "../calendar/calendar-record.ts";
 import type { CalendarRow } from "../calendar/calendar-row.ts";
 import { completeStyle, type HouseStyle } from "../calendar/house-style.ts";
@@ -28,6 +29,8 @@ import { writeAnswer } from "./write-answer.ts";
 export async function runCalendar(given: string, options: CalendarOptions): Promise<void> {
   const format = choiceOf("--format", options.format ?? "text", CALENDAR_FORMATS);
   const source = sourceChoiceOf(options);
+  const alarmMinutes = alarmOf(options, format);
+  const stamp = stampOf(process.env.SOURCE_DATE_EPOCH);
   const rank = choiceOf("--rank", options.rank ?? "all", ["principal", "all"]);
   const [zone, besides] = zonesOf(options);
   const years = yearsOf(given, zone);
@@ -53,6 +56,11 @@ export async function runCalendar(given: string, options: CalendarOptions): Prom
         const { csvLines } = await import("../report/csv-lines.ts"); // brings a library that the other forms do without
         return csvLines(calendarRecordNames(besides), records(drawn));
       }
+      case "ics": {
+        const { calendarFile } = await import("../report/calendar-file.ts");
+        const file = { name: title, description: FILE_NOTE, stamp, alarmMinutes };
+        return [calendarFile(file, calendarEvents(drawn, style))];
+      }
       default: {
         const report = calendarReport(drawn, { title, style, inUtc, made });
         return options.ascii ? inAscii(report) : report;
@@ -60,6 +68,28 @@ export async function runCalendar(given: string, options: CalendarOptions): Prom
     }
   };
   await writeAnswer(await pieces(), options.out);
+}
+
+const FILE_NOTE =
+  "Passages through the least and the greatest distance, rounded to what is known. Computed by apsidary.";
+
+/** When a calendar file is made: `SOURCE_DATE_EPOCH` where it is set, so that files can be made again to the byte; else now. */
+function stampOf(epoch: string | undefined): Date {
+  if (epoch === undefined || epoch === "") return new Date();
+  const stamp = new Date(/^\d{1,11}$/.test(epoch) ? Number(epoch) * 1000 : Number.NaN);
+  if (stamp.getTime() < Date.UTC(10_000, 0)) return stamp;
+  throw new ApsidaryError(
+    "bad-option",
+    `SOURCE_DATE_EPOCH ${shown(epoch)} is no time; it counts whole seconds since 1970, such as 1767225600.`,
+  );
+}
+
+function alarmOf({ alarm }: CalendarOptions, format: string): number | null {
+  if (alarm === undefined) return null;
+  if (format !== "ics")
+    throw new ApsidaryError("bad-option", "--alarm belongs to --format ics; add that, or leave it.");
+  if (/^\d{1,6}$/.test(alarm)) return Number(alarm);
+  throw new ApsidaryError("bad-option", `--alarm ${shown(alarm)} is no number of minutes; give one such as 30.`);
 }
 
 function* records(rows: Iterable<CalendarRow>) {
