@@ -1,9 +1,13 @@
 import { engineSpan } from "../ephemeris/engine-accuracy.ts";
 import { engineLibrary } from "../ephemeris/engine-library.ts";
 import { ApsidaryError } from "../error.ts";
+import { builtInLeapSeconds, type LeapSecondList } from "../time/leap-seconds.ts";
 import { apparentLongitudes } from "./apparent-longitude.ts";
+import { type Horizon, horizonOf } from "./horizon.ts";
+import { earthTurn } from "./horizon-turn.ts";
 import { type MoonPhase, moonElongation, nearestMoonPhase } from "./moon-phase.ts";
 import { type Solstice, solsticeBefore } from "./solstice.ts";
+import type { Site } from "./topocentric-frame.ts";
 
 /** What the sky says at an instant; instants are TDB seconds past J2000, years −1000 to 4000. All methods throw ApsidaryError `not-covered` outside. */
 export interface Sky {
@@ -20,6 +24,12 @@ export interface Sky {
    * Gives the last June or December solstice at or before an instant, TDB seconds past J2000; within 100 s from 1900 to 2100.
    */
   solsticeBefore(tdb: number, solstice: Solstice): number;
+  /**
+   * Gives the horizon of a site.
+   * @param leaps the leap-second list by which the Earth's turning is told after the table of ΔT; left out, the built-in one
+   * @throws ApsidaryError `bad-input` for a site that is none
+   */
+  horizon(site: Site, leaps?: LeapSecondList): Horizon;
 }
 
 /**
@@ -28,7 +38,8 @@ export interface Sky {
  * @throws ApsidaryError `unreadable` where astronomy-engine cannot be loaded
  */
 export async function openSky(): Promise<Sky> {
-  const longitudes = apparentLongitudes(await engineLibrary());
+  const library = await engineLibrary();
+  const longitudes = apparentLongitudes(library);
   const span = engineSpan("moon-earth");
   const covered = (tdb: number): number => {
     if (tdb >= span.from && tdb <= span.to) return tdb;
@@ -42,5 +53,6 @@ export async function openSky(): Promise<Sky> {
     nearestNewMoon: (tdb: number) => nearestMoonPhase(longitudes, covered(tdb), "new"),
     nearestFullMoon: (tdb: number) => nearestMoonPhase(longitudes, covered(tdb), "full"),
     solsticeBefore: (tdb: number, solstice: Solstice) => solsticeBefore(longitudes, covered(tdb), solstice),
+    horizon: (site: Site, leaps = builtInLeapSeconds()) => horizonOf(library, earthTurn(library, leaps), site),
   });
 }
