@@ -1,7 +1,10 @@
+import type { Pair } from "../bodies/pair.ts";
+import { type CalendarPage, calendarPage } from "../calendar/calendar-page.ts";
 import type { CalendarRow } from "../calendar/calendar-row.ts";
 import { calendarText } from "../calendar/calendar-text.ts";
 import type { CompleteStyle } from "../calendar/house-style.ts";
 import { calendarCautions } from "../calendar/note-words.ts";
+import type { Ephemeris } from "../ephemeris/open-sources.ts";
 import { wrapped } from "../report/wrapped.ts";
 import { cautionsOf } from "./cautions.ts";
 import { footOf } from "./foot.ts";
@@ -29,8 +32,33 @@ export function* calendarReport(
   yield `${title}\n\n`;
   yield* calendarText(foot.watch(rows), style, !inUtc);
   yield foot.count === 0 ? "No passage in this span.\n" : "\n";
-  for (const line of foot.lines(made)) yield wrapped(line);
+  for (const line of [...foot.cautions(), ...foot.remarks(made)]) yield wrapped(line);
   yield footOf(made, { deltaT: foot.byDeltaT, zones: true });
+}
+
+/** Gives the pieces of the page of a calendar. */
+export function calendarHtml(
+  ephemeris: Ephemeris,
+  rows: Iterable<CalendarRow>,
+  page: Omit<CalendarPage, "cautions" | "foot">,
+  pairs: readonly Pair[],
+  made: Provenance,
+): Generator<string, void, undefined> {
+  const foot = new CalendarFoot();
+  const cautions = pairs.flatMap(({ name, target, centre }) => [
+    ...cautionsOf({ targetPoint: target, centrePoint: centre }),
+    ...calendarCautions({ pair: name, kind: "periapsis", notes: name === "moon-earth" ? ["near-full-moon"] : [] }),
+  ]);
+  return calendarPage(ephemeris, foot.watch(rows), {
+    ...page,
+    cautions: [...new Set(cautions)],
+    foot: () => [
+      ...foot.remarks(made),
+      ...footOf(made, { deltaT: foot.byDeltaT, zones: true })
+        .trimEnd()
+        .split(/\n(?! )/),
+    ],
+  });
 }
 
 /** Gathers from passing rows what the foot must explain. */
@@ -50,18 +78,24 @@ export class CalendarFoot {
     }
   }
 
-  /** The lines, without the sources. */
-  lines(made: Provenance): string[] {
-    const lines = [...this.#cautions];
+  cautions(): string[] {
+    return [...this.#cautions];
+  }
+
+  /** What the rows need explained. */
+  remarks(made: Provenance): string[] {
+    const lines: string[] = [];
     if (this.count > 0) {
       lines.push(
-        "Times are printed to the minute, hour, day, month or year, distances to the place, that their uncertainty defends: at least 95 % of " +
-          "the printed values are right. Distances and sizes are geometric, from centre to centre; size and light are against those at the mean distance.",
+        "Times are printed to the minute, hour, day, month or year, distances to the place, that their uncertainty defends: at " +
+          "least 95 % of the printed values are right. Distances and sizes are geometric, from centre to centre; size and light " +
+          "are against those at the mean distance.",
       );
     }
     if (this.#predicted) {
       lines.push(
-        "UTC predicted: leap seconds that are not yet announced are not counted; the uncertainty includes them.",
+        `From ${made.leapSeconds.expires.slice(0, 10)} on UTC is predicted: leap seconds that are not yet announced are not ` +
+          "counted; the uncertainty includes them.",
       );
     }
     if (this.byDeltaT) lines.push("Before 1972 times are UT1, by ΔT, in the offset that the zone had from it.");

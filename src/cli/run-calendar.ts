@@ -1,3 +1,6 @@
+import { mkdtemp } from "node:fs/promises";
+import { tmpdir } from "node:os";
+import { join, resolve } from "node:path";
 import { DateTime } from "luxon";
 import { pairOf } from "../bodies/pair.ts";
 import { apsisCalendar, CALENDAR_PAIRS, calendarSpan } from "../calendar/apsis-calendar.ts";
@@ -11,7 +14,7 @@ import { jsonAnswer } from "../report/json-answer.ts";
 import { jsonLines } from "../report/json-lines.ts";
 import { zoneOf } from "../time/zone-of.ts";
 import { CALENDAR_FORMATS, type CalendarOptions } from "./calendar.ts";
-import { calendarReport } from "./calendar-report.ts";
+import { calendarHtml, calendarReport } from "./calendar-report.ts";
 import { choiceOf, shown } from "./choice-of.ts";
 import { openFor } from "./open-for.ts";
 import { sourceChoiceOf } from "./options.ts";
@@ -46,6 +49,10 @@ export async function runCalendar(given: string, options: CalendarOptions): Prom
   const head = { schema: "apsidary/calendar/1", made, years: [first, last], zone };
   const inUtc = zoneOf(zone).equals(zoneOf("UTC"));
 
+  const span: readonly [number, number] = [first, last];
+  const page = (of: Iterable<CalendarRow>) =>
+    calendarHtml(ephemeris, of, { title, zone, style, source, years: span }, pairs, made);
+
   const pieces = async (): Promise<Iterable<string>> => {
     switch (format) {
       case "json":
@@ -56,6 +63,8 @@ export async function runCalendar(given: string, options: CalendarOptions): Prom
         const { csvLines } = await import("../report/csv-lines.ts"); // brings a library that the other forms do without
         return csvLines(calendarRecordNames(besides), records(drawn));
       }
+      case "html":
+        return page(drawn);
       case "ics": {
         const { calendarFile } = await import("../report/calendar-file.ts");
         const file = { name: title, description: FILE_NOTE, stamp, alarmMinutes };
@@ -67,7 +76,20 @@ export async function runCalendar(given: string, options: CalendarOptions): Prom
       }
     }
   };
+  if (options.page !== undefined) {
+    const path = options.page === true ? await temporaryPage(first, last) : options.page;
+    await writeAnswer(page(rows()), path);
+    await writeAnswer(await pieces(), options.out);
+    process.stderr.write(`apsidary: the page is ${resolve(path)}\n`);
+    return;
+  }
   await writeAnswer(await pieces(), options.out);
+}
+
+/** A file in a new folder among the temporary files, so that nothing of the user's is written over. */
+async function temporaryPage(first: number, last: number): Promise<string> {
+  const folder = await mkdtemp(join(tmpdir(), "apsidary-"));
+  return join(folder, `apsides-${first === last ? first : `${first}-${last}`}.html`);
 }
 
 const FILE_NOTE =
