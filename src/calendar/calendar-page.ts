@@ -33,8 +33,8 @@ export interface CalendarPage {
 const STYLE = `
 .cautions { background: var(--panel); border-left: 4px solid var(--accent); padding: 0.5rem 1rem; margin: 1rem 0 }
 .cautions p { margin: 0.25rem 0 }
-.notes { min-width: 16rem }
-@media print { .notes { min-width: 0 } }`;
+td.words { min-width: 13rem }
+@media print { td.words { min-width: 0 } }`;
 
 /** Points of a curve; the Moon's month has then 13 and more. */
 const CURVE_POINTS = 366;
@@ -125,7 +125,7 @@ function figureOf(ephemeris: Ephemeris, { pair, year, rows }: YearBlock, page: C
   const least = rows.filter(({ kind }) => kind === "periapsis");
   const greatest = rows.filter(({ kind }) => kind === "apoapsis");
   const told = [tell(least, "filled"), tell(greatest, "open")].filter((part) => part !== "").join(", ");
-  const title = `Distance of ${pairWords(pair).replace(" about ", " from ")} in ${year}, ${unit}`;
+  const title = `${pairWords(pair).replace(" about ", " from ")}: distance in ${year}, ${unit}`;
   return `${chartElement(
     "figure",
     {},
@@ -163,7 +163,8 @@ function columnsOf({ pair, rows }: YearBlock, style: CompleteStyle): HtmlColumn<
   };
   const besides = (rows[0]?.besides ?? []).map(
     ({ zone }, i): HtmlColumn<CalendarRow> => ({
-      title: escaped(zone.slice(zone.lastIndexOf("/") + 1).replaceAll("_", " ")),
+      title: zone.slice(zone.lastIndexOf("/") + 1).replaceAll("_", " "),
+      className: "whole",
       cell: (row) => {
         const { local = row.local, printed = "" } = row.besides?.[i] ?? {};
         return time(local, shownTime(printed, row.printedUnit, style));
@@ -175,13 +176,14 @@ function columnsOf({ pair, rows }: YearBlock, style: CompleteStyle): HtmlColumn<
       title: "Local time",
       cell: (row) => time(row.local, shownTime(row.printed, row.printedUnit, style, true)),
     },
+    { title: "Passage", cell: ({ term }) => escaped(term.slice(0, 1).toUpperCase() + term.slice(1)) },
     { title: "Offset", cell: ({ local }) => escaped(local.slice(-6)) },
     ...besides,
     {
       title: rows.some(({ utcBasis }) => utcBasis === "delta-t") ? "UT" : "UTC",
+      className: "whole",
       cell: (row) => time(row.utc, shownTime(row.printedUtc, row.printedUnit, style)),
     },
-    { title: "Passage", cell: ({ term }) => escaped(term.slice(0, 1).toUpperCase() + term.slice(1)) },
     number("Distance, km", (row) => shownNumber(Number(row.printedKm), 0, style)),
     number("au", ({ printedAu }) => {
       return shownNumber(Number(printedAu), printedAu.length - printedAu.indexOf(".") - 1, style);
@@ -189,7 +191,7 @@ function columnsOf({ pair, rows }: YearBlock, style: CompleteStyle): HtmlColumn<
   ];
   if (seen) {
     columns.push(
-      number(`${escaped(pointName(seen.name))} across, ′`, ({ diameterArcmin }) =>
+      number(`${pointName(seen.name)} across, ′`, ({ diameterArcmin }) =>
         diameterArcmin === null
           ? ""
           : shownNumber(diameterArcmin, pair === "moon-earth" || pair === "earth-sun" ? 2 : 1, style),
@@ -202,7 +204,7 @@ function columnsOf({ pair, rows }: YearBlock, style: CompleteStyle): HtmlColumn<
     number("km/s", (row) => shownNumber(row.speedKmS, 2, style)),
     {
       title: "Notes",
-      className: "notes",
+      className: "words",
       cell: (row) => {
         const onlyOfYear = rows.filter(({ kind }) => kind === row.kind).length === 1;
         return escaped(noteWords(row, { onlyOfYear }).join("; "));

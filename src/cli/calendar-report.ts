@@ -45,15 +45,15 @@ export function calendarHtml(
   made: Provenance,
 ): Generator<string, void, undefined> {
   const foot = new CalendarFoot();
-  const cautions = pairs.flatMap(({ name, target, centre }) => [
-    ...cautionsOf({ targetPoint: target, centrePoint: centre }),
-    ...calendarCautions({ pair: name, kind: "periapsis", notes: name === "moon-earth" ? ["near-full-moon"] : [] }),
-  ]);
+  const cautions = pairs.flatMap(({ name }) =>
+    calendarCautions({ pair: name, kind: "periapsis", notes: name === "moon-earth" ? ["near-full-moon"] : [] }),
+  );
   return calendarPage(ephemeris, foot.watch(rows), {
     ...page,
     cautions: [...new Set(cautions)],
     foot: () => [
       ...foot.remarks(made),
+      ...foot.cautions().filter((line) => !cautions.includes(line)),
       ...footOf(made, { deltaT: foot.byDeltaT, zones: true })
         .trimEnd()
         .split(/\n(?! )/),

@@ -39,6 +39,7 @@ svg.distance .edge { stroke: var(--soft); stroke-width: 1 }
 svg.distance .curve { fill: none; stroke: var(--accent); stroke-width: 2 }
 svg.distance .least { fill: var(--accent); stroke: var(--ground); stroke-width: 1.5 }
 svg.distance .greatest { fill: var(--ground); stroke: var(--accent); stroke-width: 2.5 }
+@media print { svg.distance { max-width: 150mm } }
 @media screen and (max-width: 600px) { svg.distance text { font-size: 25px } }`;
 
 /** Draws a distance over time as an SVG element for a page that has `DISTANCE_CHART_STYLE`. */

@@ -21,7 +21,7 @@ const STYLE = `
 @media print { :root { color-scheme: light } }
 * { box-sizing: border-box }
 body { margin: 0; background: var(--ground); color: var(--ink); font: 1rem/1.5 system-ui, sans-serif }
-header, main, footer { max-width: 75rem; margin: 0 auto; padding: 0 1rem }
+header, main, footer { max-width: 80rem; margin: 0 auto; padding: 0 1rem }
 h1 { font-size: 1.7rem; line-height: 1.2; margin: 1.5rem 0 0.5rem }
 h2 { font-size: 1.3rem; margin: 2.5rem 0 0.5rem }
 h3 { font-size: 1.1rem; margin: 2rem 0 0.5rem }
@@ -29,21 +29,31 @@ a { color: var(--accent) }
 a:focus-visible, .scroll:focus-visible { outline: 3px solid var(--accent); outline-offset: 2px }
 footer { margin-top: 2.5rem; padding-bottom: 2rem; border-top: 1px solid var(--line); color: var(--soft); font-size: 0.875rem }
 .scroll { overflow-x: auto; margin: 0.5rem 0 }
-table { border-collapse: collapse; width: 100%; font-size: 0.9rem; font-variant-numeric: tabular-nums }
+table { border-collapse: collapse; width: 100%; font-size: 0.85rem; font-variant-numeric: tabular-nums }
 caption { text-align: left; color: var(--soft); padding: 0.25rem 0 }
-th, td { padding: 0.3rem 0.6rem; text-align: left; vertical-align: top; border-bottom: 1px solid var(--line) }
+th, td { padding: 0.3rem 0.45rem; text-align: left; vertical-align: top; border-bottom: 1px solid var(--line) }
 thead th { vertical-align: bottom; background: var(--panel) }
 tbody th { font-weight: 600; white-space: nowrap }
 .number { text-align: right; white-space: nowrap }
+.whole { white-space: nowrap }
+@media screen and (max-width: 44rem) {
+  table, caption, tbody, th, td { display: block }
+  thead { position: absolute; clip-path: inset(50%); width: 1px; height: 1px; overflow: hidden }
+  tr { display: flex; flex-wrap: wrap; gap: 0.1rem 1rem; border-bottom: 1px solid var(--line); padding: 0.5rem 0 }
+  tbody th, td, .number { border: 0; padding: 0.1rem 0; text-align: left }
+  tbody th, td.words { flex-basis: 100% }
+  td[data-label]::before { content: attr(data-label) " "; color: var(--soft) }
+  td.words::before, tbody td:empty { display: none }
+}
 @media print {
-  body { font-size: 9pt }
+  :root { font-size: 9pt }
   header, main, footer { max-width: none; padding: 0 }
   .scroll { overflow: visible }
-  table { font-size: 7.5pt }
+  table { font-size: 8pt }
   th, td { padding: 0.15rem 0.3rem }
   tr, figure { break-inside: avoid }
-  h2, h3 { break-after: avoid }
-  @page { margin: 14mm }
+  h2, h3, caption { break-after: avoid }
+  @page { size: landscape; margin: 14mm }
 }`;
 
 /**
@@ -74,17 +84,19 @@ ${style}
 
 /** One column of a table on a page. */
 export interface HtmlColumn<Row> {
-  /** Markup of the heading. */
+  /** The heading, as text. */
   readonly title: string;
   /** Gives the markup of a row's cell. */
   readonly cell: (row: Row) => string;
-  /** `number` stands flush right and is not broken. */
-  readonly className?: string;
+  /** `number` stands flush right and is not broken, `whole` is not broken, `words` take a line of their own in a narrow window. */
+  readonly className?: "number" | "whole" | "words";
 }
 
 /**
- * Writes a table: caption, headings, a line for each row whose first cell is its heading. It scrolls sideways in a narrow window, by keyboard
- * as well.
+ * Writes a table: caption, headings, a line for each row whose first cell is its heading.
+ *
+ * It scrolls sideways where it must, by keyboard as well. In a narrow window each row becomes a card, its cells with their headings before
+ * them; the roles are written out so that it stays a table for those who hear it.
  *
  * @param id unique on the page
  */
@@ -95,23 +107,25 @@ export function htmlTable<Row>(
   rows: readonly Row[],
 ): string {
   const classOf = ({ className }: HtmlColumn<Row>): Record<string, string> => (className ? { class: className } : {});
-  const heads = columns.map((column) => chartElement("th", { scope: "col", ...classOf(column) }, column.title));
+  const heads = columns.map((column) =>
+    chartElement("th", { scope: "col", role: "columnheader", ...classOf(column) }, escaped(column.title)),
+  );
   const lines = rows.map((row) => {
     const cells = columns.map((column, i) =>
       i === 0
-        ? chartElement("th", { scope: "row", ...classOf(column) }, column.cell(row))
-        : chartElement("td", classOf(column), column.cell(row)),
+        ? chartElement("th", { scope: "row", role: "rowheader", ...classOf(column) }, column.cell(row))
+        : chartElement("td", { role: "cell", "data-label": column.title, ...classOf(column) }, column.cell(row)),
     );
-    return `${chartElement("tr", {}, ...cells)}\n`;
+    return `${chartElement("tr", { role: "row" }, ...cells)}\n`;
   });
   const table = chartElement(
     "table",
-    {},
+    { role: "table" },
     chartElement("caption", { id }, escaped(caption)),
     "\n",
-    chartElement("thead", {}, chartElement("tr", {}, ...heads)),
+    chartElement("thead", { role: "rowgroup" }, chartElement("tr", { role: "row" }, ...heads)),
     "\n",
-    chartElement("tbody", {}, "\n", ...lines),
+    chartElement("tbody", { role: "rowgroup" }, "\n", ...lines),
   );
   return `${chartElement("div", { class: "scroll", role: "region", tabindex: 0, "aria-labelledby": id }, "\n", table, "\n")}\n`;
 }
