@@ -32,7 +32,7 @@ export function readLooseLine(
   }
   const pieces = values.length > 1 ? { cells, values } : piecesOf(text);
   const known = columns && columns.length === pieces.values.length ? columns : null;
-  if (known && known.some((column) => column !== null && "kind" in column && column.kind !== null)) {
+  if (known?.some((column) => column !== null && "kind" in column && column.kind !== null)) {
     return readCells(line, pieces.cells, pieces.values, known, withPair(settings, context));
   }
   const year = known ? (pieces.values[known.findIndex((column) => column?.role === "year")] ?? "") : "";
