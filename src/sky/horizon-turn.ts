@@ -7,6 +7,8 @@ import { ut1Of } from "./horizon-ut1.ts";
 export interface EarthTurn {
   /** Writes the matrix that takes ICRF axes to axes fixed in the Earth, row by row, to `out[0 … 8]`. */
   matrix(tdb: number, out: Float64Array): void;
+  /** Gives by how much the Earth may have turned farther or less far, degrees: what UT1 is uncertain by, half-width of 95 %. */
+  uncertaintyDeg(tdb: number): number;
 }
 
 /** Seconds from one instant for which precession and nutation are worked out to the next. */
@@ -40,6 +42,7 @@ export function earthTurn(library: EngineLibrary, leaps: LeapSecondList): EarthT
     heldFor = tdb;
   };
   return Object.freeze({
+    uncertaintyDeg: (tdb: number) => (ut1Of(tdb, leaps).uncertaintySeconds * TURN_RATE * 180) / Math.PI,
     matrix(tdb: number, out: Float64Array): void {
       const near = Math.round(tdb / GRID) * GRID;
       if (near !== heldFor) hold(near);

@@ -21,6 +21,8 @@ export interface Horizon {
   place(tdb: number, out: Float64Array): void;
   /** Gives by how much the air lifts a body, degrees. */
   refraction(altitudeDeg: number): number;
+  /** Gives by how much the Earth may have turned farther or less far, degrees, half-width of 95 %. */
+  turnUncertaintyDeg(tdb: number): number;
   /** How far the sea's horizon lies below the level, degrees, without refraction; `null` for a site below the sea. */
   readonly dipDeg: number | null;
 }
@@ -65,6 +67,7 @@ export function horizonOf(library: EngineLibrary, turn: EarthTurn, site: Site): 
       }
     },
     refraction,
+    turnUncertaintyDeg: turn.uncertaintyDeg,
     dipDeg: site.heightM < 0 ? null : Math.acos(WGS84_RADIUS_KM / (WGS84_RADIUS_KM + site.heightM / 1000)) * degrees,
   });
 }
