@@ -170,8 +170,8 @@ function notesOf(pair: Pair, rows: readonly ToldRow[], why: string | null): stri
       : [
           why,
           line
-            ? `off the line: above nought later than the straight line through the passages of 1960 to 2059, ${about}.`
-            : `${pair.name} has no straight line: the built-in kernel holds too few of its passages.`,
+            ? `off the line: above nought later than the straight line through the passages of ${line.years.join(" to ")}, ${about}.`
+            : `${pair.name} has no straight line to be held against.`,
         ];
   if (rows.some(({ source, previousSource }) => source !== previousSource)) {
     notes.push("A step between two sources holds what they differ by; it must not be taken for motion.");

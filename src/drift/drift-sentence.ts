@@ -60,15 +60,16 @@ export function dateStepSentence({ dateStepHours, parts, moon, now, before }: Da
 /** Tells in one plain sentence how long after the passage before it one came, and how far off the straight line it is. */
 export function plainStepSentence({ term, stepDays, departureHours, now, before }: PlainStep): string {
   const coarse = Math.max(now.timeUncertaintySeconds, before.timeUncertaintySeconds) > DAY_LIMIT;
-  const interval = coarse ? `about ${daysInWords(Math.round(stepDays))}` : hoursInWords(stepDays * 24);
-  const step = `${interval} after the ${term} before it`;
+  const told = (hours: number) =>
+    coarse ? `about ${daysInWords(Math.round(Math.abs(hours) / 24))}` : hoursInWords(hours);
+  const step = `${told(stepDays * 24)} after the ${term} before it`;
   if (now.source !== before.source) return `${step}, but ${differentSources(now, before)}`;
   const known = howWellKnown(now, before);
   if (departureHours === null) return `${step}${known}`;
   const departure =
     Math.round(departureHours) === 0
       ? "on the straight line to the hour"
-      : `${hoursInWords(departureHours)} ${laterOrEarlier(departureHours)} than the straight line`;
+      : `${told(departureHours)} ${laterOrEarlier(departureHours)} than the straight line`;
   return `${step}, ${departure}${known}`;
 }
 
