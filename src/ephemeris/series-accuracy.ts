@@ -1,9 +1,13 @@
 import { DAY_SECONDS } from "../bodies/constants.ts";
 import type { Pair } from "../bodies/pair.ts";
 import { POINTS } from "../bodies/point.ts";
+import { ApsidaryError } from "../error.ts";
 import type { Accuracy } from "./source.ts";
 
-/** Years at which the figures of the planets stand; between them they run straight. The stretch from 1960 to 2060 is DE405's. */
+/**
+ * Years at which the figures of the planets stand; between them they run straight. The stretch from 1960 to 2060 is
+ * DE405's.
+ */
 const YEARS = [1000, 1250, 1500, 1750, 1960, 2060, 2250, 2500, 2750, 3000] as const;
 
 type Figures = readonly [number, number, number, number, number, number, number, number, number, number];
@@ -11,11 +15,12 @@ type Figures = readonly [number, number, number, number, number, number, number,
 /**
  * Half-widths about the Sun's centre at `YEARS`: of the range rate at passages (mm/s), and of the distance there (km).
  *
- * 1960–2060: measured against DE405. The other centuries: measured against an integration that carries on from DE405's states
- * (`src/data/make/series/measure-accuracy.ts`), which lies far closer to DE405 than the series do. For the pairs
- * with fewer than 100 passages a century the figures are bounds that all passages kept, for the others what 95 % in each
- * century kept. The theory's own statement is wider: P. Bretagnon and G. Francou, Astron. Astrophys. 202 (1988) 309, give 1″ over 4000 years
- * on either side of J2000 for Mercury to Mars, over 2000 for Jupiter and Saturn, over 6000 for Uranus and Neptune (from memory).
+ * 1960–2060: measured against DE405. The other centuries: measured against an integration that carries on from
+ * DE405's states (`src/data/make/series/measure-accuracy.ts`), which lies far closer to DE405 than the series do;
+ * what DE405's own states are off adds little to it. For the pairs with fewer than 100 passages a century the figures
+ * are bounds that all passages kept, for the others what 95 % in each century kept. The theory's own statement is
+ * wider: P. Bretagnon and G. Francou, Astron. Astrophys. 202 (1988) 309, give 1″ over 4000 years on either side of
+ * J2000 for Mercury to Mars, over 2000 for Jupiter and Saturn, over 6000 for Uranus and Neptune (from memory).
  */
 const ABOUT_SUN: Readonly<Record<string, { readonly rate: Figures; readonly range: Figures }>> = {
   mercury: {
@@ -27,11 +32,11 @@ const ABOUT_SUN: Readonly<Record<string, { readonly rate: Figures; readonly rang
     range: [3.6, 2, 2.1, 1.7, 1.4, 1.4, 1.9, 2.1, 2.6, 5.4],
   },
   earth: {
-    rate: [7, 5.3, 4.4, 3.3, 3.1, 3.1, 3.2, 3.4, 5.2, 7.2],
+    rate: [7, 5.3, 4.4, 3.4, 3.25, 3.25, 3.3, 3.4, 5.2, 7.2],
     range: [15, 5, 2.9, 2.9, 2.4, 2.4, 2.4, 4, 4.5, 14],
   },
   emb: {
-    rate: [7, 5.3, 4.4, 3.3, 3.1, 3.1, 3.2, 3.4, 5.2, 7.2],
+    rate: [7, 5.3, 4.4, 3.4, 3.25, 3.25, 3.3, 3.4, 5.2, 7.2],
     range: [15, 5, 2.9, 2.9, 2.4, 2.4, 2.4, 4, 4.5, 14],
   },
   mars: {
@@ -43,11 +48,11 @@ const ABOUT_SUN: Readonly<Record<string, { readonly rate: Figures; readonly rang
     range: [320, 300, 200, 190, 150, 150, 220, 330, 350, 320],
   },
   saturn: {
-    rate: [20, 14, 26, 12, 10, 10, 12, 14, 14, 20],
+    rate: [27, 16, 26, 12, 10, 10, 14.5, 16.5, 15, 20],
     range: [450, 450, 500, 650, 650, 650, 650, 650, 650, 800],
   },
   uranus: {
-    rate: [36, 36, 36, 42, 44, 44, 50, 85, 110, 125],
+    rate: [50, 45, 42, 44, 44, 44, 50, 85, 110, 125],
     range: [40_000, 35_000, 23_000, 13_000, 9500, 9500, 19_000, 26_000, 27_000, 27_000],
   },
   neptune: {
@@ -57,27 +62,28 @@ const ABOUT_SUN: Readonly<Record<string, { readonly rate: Figures; readonly rang
 };
 
 /**
- * How far the Sun may be off from the barycentre of the planets, Pluto and the Sun, km, at `YEARS`: the errors of Uranus and
- * Neptune, by their masses. Measured likewise.
+ * How far the Sun may be off from the barycentre of the planets, Pluto and the Sun, km, at `YEARS`: the errors of
+ * Uranus and Neptune, by their masses. Measured likewise.
  */
 const SUN_SHIFT_KM: Figures = [40, 34, 20, 11, 6, 6, 12, 19, 26, 38];
 
 /**
- * How far the solar-system barycentre itself may lie from where these masses put it, km: as in the accuracy of the built-in
- * kernel, for the masses beyond Neptune (R. S. Park et al., *The JPL planetary and lunar ephemerides DE440 and DE441*,
- * Astron. J. 161 (2021) 105; from memory).
+ * How far the solar-system barycentre itself may lie from where these masses put it, km: as in the accuracy of the
+ * built-in kernel, for the masses beyond Neptune (R. S. Park et al., *The JPL planetary and lunar ephemerides DE440
+ * and DE441*, Astron. J. 161 (2021) 105; from memory).
  */
 const BARYCENTRE_SHIFT_KM = 150;
 
 /**
  * The Moon. Inside 1960–2060, against DE405, what is left is what was left out of the series: `rate` and `range`.
  *
- * Outside, its mean anomaly is uncertain by `driftArcseconds` × τ² (τ: centuries from 2000). The theory's secular terms are
- * fitted to DE406 and follow it within a few hundredths of a second of arc over these centuries (J. Chapront and G. Francou,
- * Astron. Astrophys. 404 (2003) 735; from memory), so the tide rules: DE405's acceleration of −25.826″ a century squared
- * against −25.858″ from laser ranging (J. Chapront et al., Astron. Astrophys. 387 (2002) 700) and up to −25.9″ since,
- * half of which counts. An arcsecond of the anomaly moves a passage by 1.84 s, and with `acceleration`, the greatest at a perigee, the range
- * rate; the distance of a passage it moves through the evection, by `evection` × drift.
+ * Outside, its mean anomaly is uncertain by `driftArcseconds` × τ² (τ: centuries from 2000). The theory's secular
+ * terms are fitted to DE406 and follow it within a few tenths of a second of arc over these centuries (J. Chapront
+ * and G. Francou, Astron. Astrophys. 404 (2003) 735; from memory), so the tide rules: DE405's acceleration of
+ * −25.826″ a century squared against −25.858″ from laser ranging (J. Chapront et al., Astron. Astrophys. 387 (2002)
+ * 700) and up to −25.9″ since (all from memory), half of which counts. An arcsecond of the anomaly moves a passage by
+ * 1.84 s, and with `acceleration`, the greatest at a perigee, the range rate; the distance of a passage it moves
+ * through the evection, by `evection` × drift.
  */
 const MOON = {
   rateMmS: 0.055,
@@ -89,14 +95,17 @@ const MOON = {
 } as const;
 
 /**
- * Gives the accuracy of the series: half-widths of range (km) and range rate (km/s) that at least 95 % of true errors at passages keep.
+ * Gives the accuracy of the series: half-widths of range (km) and range rate (km/s) that at least 95 % of true errors
+ * at passages keep.
  *
- * Basis: `measured` for the planets (1960 to 2060 against DE405, else against the integration that carries on from it) and for
- * the Moon from 1960 to 2060; for the Moon in other years `published`. From the solar-system barycentre the shift of that point is added (with the mean
- * motion, in the range rate), which for the inner planets is most of it.
+ * Basis: `measured` for the planets (1960 to 2060 against DE405, else against the integration that carries on from
+ * it) and for the Moon from 1960 to 2060; for the Moon in other years `published`. From the solar-system barycentre
+ * the shift of that point is added (with the mean motion, in the range rate), which for the inner planets is most of
+ * it.
  *
  * @param pair one that the series supply
  * @param tdb  TDB seconds past J2000
+ * @throws ApsidaryError `not-supplied` for another pair
  */
 export function seriesAccuracy(pair: Pair, tdb: number): Accuracy {
   const year = 2000 + tdb / (365.25 * DAY_SECONDS);
@@ -111,7 +120,8 @@ export function seriesAccuracy(pair: Pair, tdb: number): Accuracy {
     };
   }
   const figures = ABOUT_SUN[pair.name.split("-")[0] ?? ""];
-  if (!figures) return { rangeKm: 1e6, rangeRateKmS: 1, basis: "assumed" };
+  if (!figures)
+    throw new ApsidaryError("not-supplied", `the series do not hold ${pair.name}, so they state no accuracy for it.`);
   const rangeKm = at(figures.range, year);
   const rangeRateKmS = at(figures.rate, year) * 1e-6;
   const basis = "measured";

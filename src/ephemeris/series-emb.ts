@@ -12,8 +12,8 @@ const LEAST_KM = 0.1;
 const MOON_DISTANCE_KM = 385_000;
 
 /**
- * Makes the function that gives the Earth–Moon barycentre from the Sun's centre: the Earth's place and the Moon's share of
- * the way to the Moon.
+ * Makes the function that gives the Earth–Moon barycentre from the Sun's centre: the Earth's place and the Moon's
+ * share of the way to the Moon.
  *
  * @param earth VSOP87's series of the Earth's centre
  * @param moon  ELP/MPP02's of the Moon

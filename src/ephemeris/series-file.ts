@@ -15,7 +15,8 @@ export interface SeriesBlock {
 /**
  * Three variables as Poisson series, with their arguments written as a chain.
  *
- * Point 0 … `bases` − 1 are the bases: ψ = f₁T + f₂T² + … . Each later point is the sum or the difference of two earlier ones.
+ * Point 0 … `bases` − 1 are the bases: ψ = f₁T + f₂T² + … . Each later point is the sum or the difference of two
+ * earlier ones.
  */
 export interface PoissonSeries {
   readonly name: string;
@@ -39,9 +40,9 @@ const MINUS_BIT = 0x8000;
 /**
  * Reads a file of series.
  *
- * All little-endian. "APSERIES", version (u32, 1), number of series (u32). Each series: name (16 bytes, padded with zeros);
- * u32: degree, bases, sums, blocks; by block u8 variable, u8 power, u16 nought, u32 wide, u32 narrow entries; rates of
- * the bases (f64); c and s of all wide entries (f64), then of all narrow ones (f32); by sum u16 first, u16
+ * All little-endian. "APSERIES", version (u32, 1), number of series (u32). Each series: name (16 bytes, padded with
+ * zeros); u32: degree, bases, sums, blocks; by block u8 variable, u8 power, u16 nought, u32 wide, u32 narrow entries;
+ * rates of the bases (f64); c and s of all wide entries (f64), then of all narrow ones (f32); by sum u16 first, u16
  * second with the top bit set for a difference; by block the u16 places of its entries, wide ones first.
  *
  * @param bytes the whole file

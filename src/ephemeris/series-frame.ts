@@ -6,22 +6,24 @@ export type Rotation = readonly [number, number, number, number, number, number,
 /**
  * From VSOP87's dynamical ecliptic and equinox J2000 to the axes of DE405 (ICRF).
  *
- * Obliquity 23° 26′ 21.40889″ and −0.07893″ and 0.01196″ about the z and y axes of the equator: fitted to the directions
- * of the Earth from the Sun in DE405, 1960–2059, which it then meets within 0.007″ (rms). VSOP87's own rotation to the FK5 (P. Bretagnon
- * and G. Francou, Astron. Astrophys. 202 (1988) 309: 23° 26′ 21.4091″ and −0.0990″), carried to the ICRF by the spin of 0.0229″
- * between the two (F. Mignard and M. Froeschlé, Astron. Astrophys. 354 (2000) 732), agrees within 0.02″. (Both from memory.) Distances from
- * the Sun do not depend on it.
+ * Obliquity 23° 26′ 21.40889″ and −0.07893″ and 0.01196″ about the z and y axes of the equator: fitted to the
+ * directions of the Earth from the Sun in DE405, 1960–2059, which it then meets within 0.007″ (rms). VSOP87's own
+ * rotation to the FK5 (P. Bretagnon and G. Francou, Astron. Astrophys. 202 (1988) 309: 23° 26′ 21.4091″ and
+ * −0.0990″), carried to the ICRF by the spin of 0.0229″ between the two (F. Mignard and M. Froeschlé, Astron.
+ * Astrophys. 354 (2000) 732), agrees within 0.02″. (Both from memory.) Distances from the Sun do not depend on it.
  */
 export function vsop87ToIcrf(): Rotation {
   return small(eclipticToEquator(84381.40889), 0.01196, -0.07893);
 }
 
 /**
- * From the inertial mean ecliptic of J2000 and the departure point of ELP/MPP02 (constants fitted to DE405) to the axes of DE405.
+ * From the inertial mean ecliptic of J2000 and the departure point of ELP/MPP02 (constants fitted to DE405) to the
+ * axes of DE405.
  *
- * Obliquity 23° 26′ 21.40928″, and −0.05028″ along the equator: J. Chapront, M. Chapront-Touzé and G. Francou, *A new determination
- * of lunar orbital parameters, precession constant and tidal acceleration from LLR measurements*, Astron. Astrophys. 387 (2002) 700,
- * the row for DE405 (from memory). Held against DE405 1960–2059 the rest is below 0.001″ about each axis.
+ * Obliquity 23° 26′ 21.40928″, and −0.05028″ along the equator: J. Chapront, M. Chapront-Touzé and G. Francou, *A new
+ * determination of lunar orbital parameters, precession constant and tidal acceleration from LLR measurements*,
+ * Astron. Astrophys. 387 (2002) 700, the row for DE405 (from memory). Held against DE405 1960–2059 the rest is below
+ * 0.001″ about each axis.
  */
 export function elpToIcrf(): Rotation {
   return small(eclipticToEquator(84381.40928), 0, -0.05028);

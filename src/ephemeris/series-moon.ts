@@ -8,9 +8,9 @@ import { seriesSum } from "./series-sum.ts";
 const CENTURY_SECONDS = 36_525 * DAY_SECONDS;
 
 /**
- * Motion of the mean ecliptic of date against that of J2000: P = sin(π/2) sin Π and Q = sin(π/2) cos Π by powers 1 … 5 of
- * Julian centuries. J. Laskar, *Secular terms of classical planetary theories using the results of general theory*, Astron.
- * Astrophys. 157 (1986) 59, as ELP/MPP02 takes them.
+ * Motion of the mean ecliptic of date against that of J2000: P = sin(π/2) sin Π and Q = sin(π/2) cos Π by powers 1 …
+ * 5 of Julian centuries. J. Laskar, *Secular terms of classical planetary theories using the results of general
+ * theory*, Astron. Astrophys. 157 (1986) 59, as ELP/MPP02 takes them.
  */
 const P = [0.10180391e-4, 0.47020439e-6, -0.5417367e-9, -0.2507948e-11, 0.463486e-14] as const;
 const Q = [-0.113469002e-3, 0.12372674e-6, 0.1265417e-8, -0.1371808e-11, -0.320334e-14] as const;
@@ -20,8 +20,8 @@ const Q = [-0.113469002e-3, 0.12372674e-6, 0.1265417e-8, -0.1371808e-11, -0.3203
  *
  * @param series longitude and latitude (rad) and distance (km) by Julian centuries, inertial mean ecliptic of date
  *
- * Source: J. Chapront and G. Francou, *The lunar theory ELP revisited. Introduction of new planetary perturbations*, Astron.
- * Astrophys. 404 (2003) 735.
+ * Source: J. Chapront and G. Francou, *The lunar theory ELP revisited. Introduction of new planetary perturbations*,
+ * Astron. Astrophys. 404 (2003) 735.
  */
 export function moonFromEarth(series: PoissonSeries): StateWriter {
   const sum = seriesSum(series);
@@ -36,7 +36,10 @@ export function moonFromEarth(series: PoissonSeries): StateWriter {
   };
 }
 
-/** From the ecliptic of date to that of J2000: the rotation by π about the node, and the motion of that node with time. */
+/**
+ * From the ecliptic of date to that of J2000: the rotation by π about the node, and the motion of that node with
+ * time.
+ */
 function toEclipticOfJ2000(t: number, out: Float64Array): void {
   const p = powers(P, t);
   const q = powers(Q, t);

@@ -12,8 +12,8 @@ const MILLENNIUM_SECONDS = 365_250 * DAY_SECONDS;
  *
  * @param series longitude and latitude (rad) and distance (au) by thousands of Julian years, dynamical ecliptic J2000
  *
- * Source: P. Bretagnon and G. Francou, *Planetary theories in rectangular and spherical variables: VSOP87 solutions*, Astron.
- * Astrophys. 202 (1988) 309.
+ * Source: P. Bretagnon and G. Francou, *Planetary theories in rectangular and spherical variables: VSOP87 solutions*,
+ * Astron. Astrophys. 202 (1988) 309.
  */
 export function planetFromSun(series: PoissonSeries): StateWriter {
   const sum = seriesSum(series);

@@ -5,7 +5,10 @@ import type { StateWriter } from "./series-spherical.ts";
 const DEGREE = Math.PI / 180;
 const CENTURY_SECONDS = 36_525 * DAY_SECONDS;
 
-/** Mean elements of Pluto's system, ecliptic and equinox J2000: au and degrees, and the rates of the longitudes a century. */
+/**
+ * Mean elements of Pluto's system, ecliptic and equinox J2000: au and degrees, and the rates of the longitudes a
+ * century.
+ */
 const ELEMENTS = {
   semiMajorAxis: 39.48686035,
   eccentricity: 0.24885238,
@@ -24,7 +27,8 @@ const ELEMENTS = {
  * It lies within 0.1 au of DE405 in 1960–2059, which is enough for what it is for: Pluto's share in the solar-system
  * barycentre, 1/135 200 000 of the way (0.1 au make 0.1 km).
  *
- * Source: E. M. Standish and J. G. Williams, *Approximate positions of the planets*, table for 3000 BC to AD 3000 (from memory).
+ * Source: E. M. Standish and J. G. Williams, *Approximate positions of the planets*, table for 3000 BC to AD 3000
+ * (from memory).
  */
 export function plutoFromSun(): StateWriter {
   const e = ELEMENTS.eccentricity;

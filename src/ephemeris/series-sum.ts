@@ -3,9 +3,10 @@ import type { PoissonSeries } from "./series-file.ts";
 /**
  * Makes the function that sums a series.
  *
- * Sine and cosine are computed for the bases alone; each further argument takes one complex product, so the error of a
- * point is that of the bases' phases times the few multiples of them that it holds (below 1e-10 rad where |T| ≤ 10
- * centuries). Rates are exact derivatives of the same sums. No allocation; one function must not be called from inside itself.
+ * Sine and cosine are computed for the bases alone; each further argument takes one complex product, so the error of
+ * a point is that of the bases' phases times the few multiples of them that it holds (below 1e-10 rad where |T| ≤ 10
+ * centuries). Rates are exact derivatives of the same sums. No allocation; one function must not be called from
+ * inside itself.
  *
  * @param series three variables
  * @returns a function that, for T in the series' unit, writes the three variables to `out[0 … 2]` and their rates, per

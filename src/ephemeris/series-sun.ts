@@ -5,8 +5,8 @@ import type { StateWriter } from "./series-spherical.ts";
 import { thinnedSeries } from "./series-thinned.ts";
 
 /**
- * Masses of the Sun over those of the planets with their moons, as DE405 has them: E. M. Standish, *JPL Planetary and Lunar
- * Ephemerides, DE405/LE405*, JPL IOM 312.F-98-048 (1998); from memory.
+ * Masses of the Sun over those of the planets with their moons, as DE405 has them: E. M. Standish, *JPL Planetary and
+ * Lunar Ephemerides, DE405/LE405*, JPL IOM 312.F-98-048 (1998); from memory.
  */
 const SUN_OVER_PLANET = {
   mercury: 6_023_600,
@@ -24,12 +24,12 @@ const SUN_OVER_PLUTO = 135_200_000;
 const LEAST_SHARE_AU = 3e-10;
 
 /**
- * Makes the function that gives the Sun from the solar-system barycentre: minus the planets' places from the Sun, weighted by
- * their masses.
+ * Makes the function that gives the Sun from the solar-system barycentre: minus the planets' places from the Sun,
+ * weighted by their masses.
  *
- * Terms whose share lies below 45 m are left out. The Earth stands for the Earth–Moon barycentre (14 m). Pluto, which the
- * theory does not hold, goes on an ellipse: its share is 44 km, without which the Earth's range rate from the barycentre would be 9 mm/s
- * off. Asteroids are left out.
+ * Terms whose share lies below 45 m are left out. The Earth stands for the Earth–Moon barycentre (14 m). Pluto, which
+ * the theory does not hold, goes on an ellipse: its share is 44 km, without which the Earth's range rate from the
+ * barycentre would be 9 mm/s off. Asteroids are left out.
  *
  * @param series those of the eight planets
  */

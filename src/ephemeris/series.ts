@@ -19,8 +19,8 @@ export interface SeriesBytes {
 }
 
 /**
- * TDB seconds past J2000 of 999-12-31T00:00 and 3001-01-02T00:00 (proleptic Gregorian): the years 1000 to 3000 on any clock, UT
- * and zones included.
+ * TDB seconds past J2000 of 999-12-31T00:00 and 3001-01-02T00:00 (proleptic Gregorian): the years 1000 to 3000 on any
+ * clock, UT and zones included.
  */
 const SPAN: Span = Object.freeze({ from: -31_557_038_400, to: 31_588_574_400 });
 
@@ -30,8 +30,9 @@ const PLANETS = ["mercury", "venus", "earth", "mars", "jupiter", "saturn", "uran
  * Opens the published theories VSOP87 and ELP/MPP02 as a source for the years 1000 to 3000.
  *
  * Supplied are `moon-earth` and Mercury to Neptune, the Earth and the Earth–Moon barycentre from the Sun and from the
- * solar-system barycentre, with analytic velocities. `earth` is VSOP87's own Earth; `emb` is that and the Moon's place divided by 1 + 81.30056,
- * DE405's ratio of masses. Not supplied: Pluto, which the theories do not hold, and the moons of Jupiter.
+ * solar-system barycentre, with analytic velocities. `earth` is VSOP87's own Earth; `emb` is that and the Moon's
+ * place divided by 1 + 81.30056, DE405's ratio of masses. Not supplied: Pluto, which the theories do not hold, and
+ * the moons of Jupiter.
  *
  * @param bytes the two files, as the package carries them
  * @throws ApsidaryError `bad-kernel` where they are not what they should be

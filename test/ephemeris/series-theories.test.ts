@@ -63,7 +63,7 @@ const seconds = (jd: number) => (jd - 2451545) * 86400;
 
 describe("the theories as the package of data carries them", () => {
   // P. Bretagnon and G. Francou, file vsop87.chk of VSOP87, version D, JD 2451545.0 and 2415020.0 (from memory): ten decimals.
-  test.each([
+  test.each<[planet: string, ...values: number[]]>([
     ["mercury", 4.4293481036, -0.0527573409, 0.4664714751, 3.4851161911, 0.0565906173, 0.4183426275],
     ["venus", 3.1870221833, 0.0569782849, 0.7202129253, 5.9749622238, -0.0591260014, 0.7274719359],
     ["earth", 1.7519238681, -0.0000039656, 0.9833276819, 1.7391225563, -0.0000005679, 0.9832689778],
@@ -72,7 +72,7 @@ describe("the theories as the package of data carries them", () => {
     ["saturn", 0.7980038761, -0.0401984149, 9.1838483715, 4.6512836347, 0.0192701409, 10.0668531997],
     ["uranus", 5.5225485803, -0.0119527838, 19.9240482667, 4.3397761173, 0.0011570307, 18.992716362],
     ["neptune", 5.3045629252, 0.0042236789, 30.1205328392, 1.4956195225, -0.021961003, 29.8710345051],
-  ] as const)("give VSOP87's own check values of %s to their last digit", async (planet, ...values) => {
+  ])("give VSOP87's own check values of %s to their last digit", async (planet, ...values) => {
     const tables = await tablesOf(`vsop87D${planet}`);
     const found = [...vsop87(tables, 2451545), ...vsop87(tables, 2415020)];
     // one unit of the last digit: half for its rounding, half for that of the terms and for the rows that are missing

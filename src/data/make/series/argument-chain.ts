@@ -17,8 +17,8 @@ interface Reached {
 /**
  * Writes many arguments as sums and differences of few, so that one complex product gives the sine and cosine of each.
  *
- * Multiples of the seeds are laid out first; then each argument is sought as the sum or difference of two points already
- * there, over and over; where nothing more is found, the one that stands first becomes a base of its own. The
+ * Multiples of the seeds are laid out first; then each argument is sought as the sum or difference of two points
+ * already there, over and over; where nothing more is found, the one that stands first becomes a base of its own. The
  * arguments of planetary theories are integer combinations of a dozen mean longitudes, so few are left to that.
  *
  * @param wanted  arguments, the most important first
@@ -118,8 +118,8 @@ function phaseGap(a: readonly number[], b: readonly number[], reach: number): nu
 }
 
 /**
- * Drops points that nothing needs, puts the bases before the sums and the sums in order of their depth: neighbours then do
- * not wait for each other when they are computed.
+ * Drops points that nothing needs, puts the bases before the sums and the sums in order of their depth: neighbours
+ * then do not wait for each other when they are computed.
  */
 function pruned(reached: readonly Reached[], places: readonly number[]) {
   const needed = new Set([0, ...places]);

@@ -26,7 +26,8 @@ const EARTH_MOON_GM = SUN_GM / 328_900.5614;
 const EARTH_OVER_MOON = 81.30056;
 
 /**
- * GM, km³/s²: E. M. Standish, *JPL Planetary and Lunar Ephemerides, DE405/LE405*, JPL IOM 312.F-98-048 (1998); from memory.
+ * GM, km³/s²: E. M. Standish, *JPL Planetary and Lunar Ephemerides, DE405/LE405*, JPL IOM 312.F-98-048 (1998); from
+ * memory.
  */
 export const GM = Float64Array.from([
   SUN_GM,
@@ -91,16 +92,18 @@ const DE405_AT_J2000: readonly (readonly number[])[] = [
 /**
  * Carries the Sun, the planets, Pluto and the Moon from DE405's states at J2000 through the centuries.
  *
- * Forces: the Einstein–Infeld–Hoffmann equations of all eleven bodies, the flattening of the Sun (on the four inner planets) and of
- * the Earth (on the Moon); no asteroids and no tides, so it serves the planets and the Earth–Moon barycentre and not the Moon. Against
- * DE405 itself the range rates keep within 0.02 mm/s of each other over 60 years (Mars 0.2 mm/s, for want of asteroids).
+ * Forces: the Einstein–Infeld–Hoffmann equations of all eleven bodies, the flattening of the Sun (on the four inner
+ * planets) and of the Earth (on the Moon); no asteroids and no tides, so it serves the planets and the Earth–Moon
+ * barycentre and not the Moon. Against DE405 itself the range rates keep within 0.02 mm/s of each other over 60 years
+ * (Mars 0.2 mm/s, for want of asteroids).
  *
  * @param stepDays days from state to state; negative goes back
  * @param steps    number of steps
  * @returns `steps` + 1 states of `STATE_SIZE` numbers, the first at J2000
  *
- * Equations: X. X. Newhall, E. M. Standish and J. G. Williams, *DE 102*, Astron. Astrophys. 125 (1983) 150. Method: modified
- * midpoint rule with Richardson's extrapolation in eight columns (R. Bulirsch and J. Stoer, Numer. Math. 8 (1966) 1), compensated sums.
+ * Equations: X. X. Newhall, E. M. Standish and J. G. Williams, *DE 102*, Astron. Astrophys. 125 (1983) 150. Method:
+ * modified midpoint rule with Richardson's extrapolation in eight columns (R. Bulirsch and J. Stoer, Numer. Math. 8
+ * (1966) 1), compensated sums.
  */
 export function integratePlanets(stepDays: number, steps: number): Float64Array {
   const { derivative, midpoint } = makeRule();

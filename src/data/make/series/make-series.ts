@@ -3,9 +3,9 @@
  *
  *     npx tsx src/data/make/series/make-series.ts [folder]
  *
- * All terms of VSOP87B are kept. Of ELP/MPP02 those are kept that reach, anywhere in ±10 centuries, `MOON_DISTANCE_KM` in
- * the distance (those faster than once a month sooner, slower ones later, since passages hang on the rate) or
- * `MOON_DIRECTION_KM` across it.
+ * All terms of VSOP87B are kept. Of ELP/MPP02 those are kept that reach, anywhere in ±10 centuries,
+ * `MOON_DISTANCE_KM` in the distance (those faster than once a month sooner, slower ones later, since passages hang
+ * on the rate) or `MOON_DIRECTION_KM` across it.
  */
 import { writeFileSync } from "node:fs";
 import { argumentChain } from "./argument-chain.ts";
@@ -20,8 +20,8 @@ const MEAN_DISTANCE_KM = 385_000;
 const MOON_RATE = 8399.7;
 
 /**
- * Rates of the mean longitudes of Mercury … Neptune and of D, F, l, rad per thousand Julian years: P. Bretagnon and G. Francou,
- * Astron. Astrophys. 202 (1988) 309, as the frequencies of the theory's own terms have them.
+ * Rates of the mean longitudes of Mercury … Neptune and of D, F, l, rad per thousand Julian years: P. Bretagnon and
+ * G. Francou, Astron. Astrophys. 202 (1988) 309, as the frequencies of the theory's own terms have them.
  */
 const VSOP87_RATES = [
   26087.9031415742, 10213.285546211, 6283.0758499914, 3340.6124266998, 529.6909650946, 213.299095438, 74.7815985673,
@@ -29,9 +29,9 @@ const VSOP87_RATES = [
 ];
 
 /**
- * Rates of D, F, l, l′ (rad per powers of a century), as the theory's own terms have them, and of the mean longitudes of
- * Mercury … Neptune (arcseconds a century): M. Chapront-Touzé and J. Chapront, Astron. Astrophys. 190 (1988) 342. They only help
- * to find sums: each argument is kept to the tolerance given.
+ * Rates of D, F, l, l′ (rad per powers of a century), as the theory's own terms have them, and of the mean longitudes
+ * of Mercury … Neptune (arcseconds a century): M. Chapront-Touzé and J. Chapront, Astron. Astrophys. 190 (1988) 342.
+ * They only help to find sums: each argument is kept to the tolerance given.
  */
 const ELP_RATES = [
   [7771.377144990897, -0.000033091588061916815, 3.105886125976076e-8, -2.0400959701089275e-10],

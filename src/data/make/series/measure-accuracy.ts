@@ -3,9 +3,9 @@
  *
  *     npx tsx src/data/make/series/measure-accuracy.ts FOLDER [pair,pair …]
  *
- * The states of the integration (190 MB, some minutes) are kept in FOLDER and found there the next time. The Moon's part of the way from the
- * Earth–Moon barycentre to the Earth is taken from ELP/MPP02, since the integration knows no tides. What is printed is the ground of the
- * figures in `src/ephemeris/series-accuracy.ts`.
+ * The states of the integration (190 MB, some minutes) are kept in FOLDER and found there the next time. The Moon's
+ * part of the way from the Earth–Moon barycentre to the Earth is taken from ELP/MPP02, since the integration knows no
+ * tides. What is printed is the ground of the figures in `src/ephemeris/series-accuracy.ts`.
  */
 import { existsSync, readFileSync, writeFileSync } from "node:fs";
 import { allPairs, pairOf } from "../../../bodies/pair.ts";

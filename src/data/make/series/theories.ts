@@ -1,4 +1,7 @@
-/** One term of a theory, amplitude · Tᵖ · cos(argument) + … : what stands beside one argument in one place of the theory. */
+/**
+ * One term of a theory, amplitude · Tᵖ · cos(argument) + … : what stands beside one argument in one place of the
+ * theory.
+ */
 export interface Entry {
   /** 0, 1, 2: longitude, latitude, distance. */
   readonly variable: number;
