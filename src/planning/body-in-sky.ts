@@ -6,6 +6,7 @@ import type { Motion, Source, Span } from "../ephemeris/source.ts";
 import { ApsidaryError } from "../error.ts";
 import { type SourceChoice, timelineFor } from "../passages/timeline-for.ts";
 import { formatTdb } from "../time/format-tdb.ts";
+import { interpolatedPlace } from "./interpolated-place.ts";
 
 /** Writes a place, km, ICRF, for a time in TDB seconds past J2000 to `out[0 … 2]`. */
 export type Place = (tdb: number, out: Float64Array) => void;
@@ -16,6 +17,8 @@ export interface BodyInSky {
   readonly geometric: Place;
   /** Where it is seen: body and Earth both as they were when the light left, which takes light-time and aberration in. */
   readonly apparent: Place;
+  /** `apparent` for many times near each other, within 0.1″. */
+  readonly apparentNearby: Place;
   /** From the Sun's centre, at an instant. */
   readonly fromSun: Place;
   /** Equatorial (for the Moon mean) radius, km; `null` where none is known here. */
@@ -28,6 +31,8 @@ export interface BodyInSky {
 
 /** km/s, by definition of the metre. */
 export const LIGHT_SPEED = 299_792.458;
+/** Seconds between the nodes of `apparentNearby`: at most 0.07″ for Mercury, 0.001″ for the Moon and Sun, 0.003″ for Io. */
+const NODE_STEP = { planet: 43_200, moon: 7200, jupiterMoon: 3600 } as const;
 /** Seconds by which a span is drawn in, so that no light left before its beginning: from beyond Pluto it takes under 7 h. */
 const LIGHT_MARGIN = 25_200;
 
@@ -95,13 +100,22 @@ export function bodyInSky(ephemeris: Ephemeris, pair: Pair, choice: SourceChoice
   }
   const rounds = pair.centre === POINTS.earth || isSun ? 1 : 2;
   const name = isSun ? "sun" : nameOf(pair);
+  const covered = common(spans).map(({ from, to }) => ({ from: from + LIGHT_MARGIN, to }));
+  const apparent = seenPlace(geometric, rounds);
+  const step =
+    isSun || pair.centre === POINTS.sun
+      ? NODE_STEP.planet
+      : pair.centre === POINTS.earth
+        ? NODE_STEP.moon
+        : NODE_STEP.jupiterMoon;
   return Object.freeze({
     geometric,
-    apparent: seenPlace(geometric, rounds),
+    apparent,
+    apparentNearby: interpolatedPlace(apparent, step, covered),
     fromSun,
     radiusKm: name !== null && isBodyName(name) ? physicalBody(name).equatorialRadiusKm : null,
     isSun,
-    covered: common(spans).map(({ from, to }) => ({ from: from + LIGHT_MARGIN, to })),
+    covered,
   });
 }
 

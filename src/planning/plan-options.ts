@@ -3,7 +3,6 @@ import type { Nearness } from "../passages/near-window.ts";
 import type { SourceChoice } from "../passages/timeline-for.ts";
 import type { Sky } from "../sky/open-sky.ts";
 import type { Site } from "../sky/topocentric-frame.ts";
-import { zoneOf } from "../time/zone-of.ts";
 
 /** A site with what it is called. */
 export interface PlanSite extends Site {
@@ -62,9 +61,4 @@ function within(what: string, value: number, least: number, most: number, unit: 
 /** Gives the name of a site: its own, or its coordinates. */
 export function siteLabel({ name, latitudeDeg, longitudeDeg, heightM }: PlanSite): string {
   return name ?? `${latitudeDeg},${longitudeDeg},${heightM}`;
-}
-
-/** Refuses a zone that there is not. @throws ApsidaryError `bad-zone` */
-export function requireZone({ zone }: PlanSite): void {
-  if (zone !== undefined) zoneOf(zone);
 }

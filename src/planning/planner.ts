@@ -13,19 +13,22 @@ import { LOOK } from "../sky/horizon.ts";
 import { dateTimeOf } from "../time/date-time-of.ts";
 import { formatTdb } from "../time/format-tdb.ts";
 import { utcText } from "../time/format-utc.ts";
+import { zoneOf } from "../time/zone-of.ts";
 import { bodyInSky, LIGHT_SPEED, norm, type Place, sunInSky } from "./body-in-sky.ts";
-import { completePlanOptions, type PlanOptions, type PlanSite, requireZone, siteLabel } from "./plan-options.ts";
+import { completePlanOptions, type PlanOptions, type PlanSite, siteLabel } from "./plan-options.ts";
 import type { PlanRow, WhyNoRise, WhyNoTransit, WhyNot } from "./plan-row.ts";
 import { commonStretches, type Stretch, stretchesAbove } from "./stretches.ts";
 
 /** Seconds from sample to sample of an altitude; its period is a day. */
-const STEP = 1800;
+const STEP = 3600;
 /** Seconds to which rise, set and the ends of windows are found. */
 const TOLERANCE = 0.01;
 /** A body that rises and sets does so once in this many seconds; the Moon's day is up to 24 h 59 min where it is not grazing. */
 const MOON_DAY = 91_000;
 /** Seconds to either side of a passage within which the site's own extreme lies: the turning Earth moves it by half a day and little more. */
 const OWN_EXTREME = 2 * DAY_SECONDS;
+/** Seconds from sample to sample in its search; it has one minimum and one maximum a day. */
+const OWN_STEP = 7200;
 /** Degrees an hour angle gains in a second, for the fixed stars. */
 const HOUR_ANGLE_RATE = (360 * 1.002_737_909_35) / DAY_SECONDS;
 
@@ -46,7 +49,6 @@ export function planner(
   options: PlanOptions,
 ): (passage: Passage) => PlanRow {
   const { sky, within, minAltitudeDeg, darkBelowDeg, refraction, windowDays, source } = completePlanOptions(options);
-  requireZone(site);
   const body = bodyInSky(ephemeris, pair, source);
   const sun = body.isSun ? body : sunInSky(ephemeris, source);
   const { leapSeconds } = ephemeris;
@@ -56,6 +58,7 @@ export function planner(
   );
   const label = siteLabel(site);
   const zone = site.zone ?? null;
+  const clock = zone === null ? null : zoneOf(zone);
   /** The distance of the pair is the distance from the Earth, so that a site has an extreme of its own. */
   const ownExtreme = body.isSun || pair.centre === POINTS.earth;
   const atPole = Math.abs(site.latitudeDeg) === 90;
@@ -69,13 +72,13 @@ export function planner(
     return looked;
   };
   const lifted = (altitude: number) => (refraction ? altitude + horizon.refraction(altitude) : altitude);
-  const altitude = (tdb: number) => lifted(look(body.apparent, tdb)[LOOK.altitude] as number);
-  const sunAltitude = (tdb: number) => look(sun.apparent, tdb)[LOOK.altitude] as number;
+  const altitude = (tdb: number) => lifted(look(body.apparentNearby, tdb)[LOOK.altitude] as number);
+  const sunAltitude = (tdb: number) => look(sun.apparentNearby, tdb)[LOOK.altitude] as number;
   const distance = (tdb: number) => look(body.geometric, tdb)[LOOK.distance] as number;
 
   const utc = (tdb: number | null) => (tdb === null ? null : utcText(tdb, 3, leapSeconds));
   const local = (tdb: number | null) =>
-    tdb === null || zone === null ? null : dateTimeOf(tdb, zone, leapSeconds).toISO();
+    tdb === null || clock === null ? null : dateTimeOf(tdb, "UTC", leapSeconds).setZone(clock).toISO();
   const diameter = (km: number) =>
     body.radiusKm === null ? null : rounded((2 * Math.asin(body.radiusKm / km) * 10_800) / Math.PI, 4);
 
@@ -193,7 +196,7 @@ export function planner(
   function transitNear(t: number, span: Span): number | null {
     let at = t;
     for (let i = 0; i < 10; i++) {
-      at -= (look(body.apparent, at)[LOOK.hourAngle] as number) / HOUR_ANGLE_RATE;
+      at -= (look(body.apparentNearby, at)[LOOK.hourAngle] as number) / HOUR_ANGLE_RATE;
       if (!(at > span.from && at < span.to)) return null;
     }
     return at;
@@ -227,7 +230,7 @@ export function planner(
 
   /** The site's own moment of least (sign 1) or greatest (−1) distance. */
   function ownMoment({ from, to }: Span, sign: 1 | -1): number | null {
-    const count = Math.ceil((to - from) / STEP);
+    const count = Math.ceil((to - from) / OWN_STEP);
     const step = (to - from) / count;
     let least = Infinity;
     let at = 0;
