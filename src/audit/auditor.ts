@@ -312,6 +312,8 @@ function missingOf(claims: ReadonlyMap<string, Claims>, sky: Sky): PassageRow[] 
   const missing: PassageRow[] = [];
   for (const { row, lines, first, last } of claims.values()) {
     if (lines.size < 2) continue;
+    const about = (last - first) / (2 * row.pair.halfPeriodSeconds);
+    if (about > 3 * lines.size + 3) continue; // a selection, without looking
     const here: SkyPassage[] = [];
     let all = lines.size;
     let at = sky.neighbour(row.pair, row.kind, first, 1);
