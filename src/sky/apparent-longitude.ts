@@ -13,7 +13,9 @@ export interface ApparentLongitudes {
  * Light time is taken off by looking back by distance ÷ speed of light, which for the Sun is the annual aberration. Time goes in as in
  * `engineMotion`, so the package's own ΔT never comes in.
  *
- * Against the complete VSOP87 and ELP/MPP02, years 1900–2100: the Sun 95 % within 3.5″, the Moon within 4.5″.
+ * Against the complete VSOP87 and ELP/MPP02, greatest difference at 600 dates: from 1900 to 2100 the Sun 2.1″ and the Moon
+ * 3.7″; around the years 1000 and 3000 7″ and 3.6′, around 0 and 4000 16″ and 15′, around −1000 20″ and 36′ (the Moon's
+ * mean motion of 1954 has an older acceleration).
  */
 export function apparentLongitudes(library: EngineLibrary): ApparentLongitudes {
   const time = new library.AstroTime(0);

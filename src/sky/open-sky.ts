@@ -13,15 +13,15 @@ import type { Site } from "./topocentric-frame.ts";
 export interface Sky {
   /**
    * Gives the Moon's elongation from the Sun in apparent geocentric ecliptic longitude, degrees from 0 (new Moon) through 180
-   * (full) to below 360; within 6″ from 1900 to 2100.
+   * (full) to below 360; within 5″ from 1900 to 2100, 4′ around the years 1000 and 3000, 37′ around −1000.
    */
   moonElongationDeg(tdb: number): number;
-  /** Gives the new Moon nearest to an instant; within 12 s from 1900 to 2100. */
+  /** Gives the new Moon nearest to an instant; within 8 s from 1900 to 2100, 7 min around the years 1000 and 3000, 75 min around −1000. */
   nearestNewMoon(tdb: number): MoonPhase;
-  /** Gives the full Moon nearest to an instant; within 12 s from 1900 to 2100. */
+  /** Gives the full Moon nearest to an instant; as good as the new Moon. */
   nearestFullMoon(tdb: number): MoonPhase;
   /**
-   * Gives the last June or December solstice at or before an instant, TDB seconds past J2000; within 100 s from 1900 to 2100.
+   * Gives the last June or December solstice at or before an instant, TDB seconds past J2000; within 60 s from 1900 to 2100, 10 min throughout.
    */
   solsticeBefore(tdb: number, solstice: Solstice): number;
   /**
