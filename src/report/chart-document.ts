@@ -28,6 +28,7 @@ const SHARED_STYLE = [
   ".zero { stroke: #222; stroke-width: 1.5 }",
 ];
 const NARROW_STYLE = ["text { font-size: 24px }", ".title { font-size: 27px }"];
+const PRINT_STYLE = ["text { font-size: 20px }", ".title { font-size: 24px }"];
 
 /**
  * Writes a chart as an SVG file: it scales to the width it is given (960 pixels at most), stands on white, holds title and description,
@@ -39,7 +40,8 @@ export function chartDocument(chart: ChartDocument): string {
   const style = [
     `svg.${name} { width: 100%; max-width: 960px; height: auto; display: block; margin: 0 auto; background: #fff }`,
     rules([...SHARED_STYLE, ...chart.style]),
-    `@media (max-width: ${NARROW}px) {\n${rules(NARROW_STYLE)}\n}`,
+    `@media screen and (max-width: ${NARROW}px) {\n${rules(NARROW_STYLE)}\n}`,
+    `@media print {\nsvg.${name} { max-height: 100vh }\n${rules(PRINT_STYLE)}\n}`, // a tall chart stays on one page
   ].join("\n");
   const svg = chartElement(
     "svg",
