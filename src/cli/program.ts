@@ -1,4 +1,5 @@
 import { Command } from "commander";
+import { addAudit } from "./audit.ts";
 import { addCalendar } from "./calendar.ts";
 import { addDrift } from "./drift-command.ts";
 import { addPassages } from "./passages.ts";
@@ -35,6 +36,7 @@ read or written, and nothing was written; 70 a defect of the program itself.`,
   addRange(program);
   addCalendar(program);
   addDrift(program);
+  addAudit(program);
   addSources(program);
   return program;
 }
