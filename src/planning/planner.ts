@@ -228,21 +228,25 @@ export function planner(
     return best;
   }
 
-  /** The site's own moment of least (sign 1) or greatest (−1) distance. */
+  /** The site's own moment of least (sign 1) or greatest (−1) distance: of one a day, near enough to be compared only when each is found. */
   function ownMoment({ from, to }: Span, sign: 1 | -1): number | null {
+    const signed = (tdb: number) => sign * distance(tdb);
     const count = Math.ceil((to - from) / OWN_STEP);
     const step = (to - from) / count;
     let least = Infinity;
-    let at = 0;
-    for (let i = 0; i <= count; i++) {
-      const there = sign * distance(from + i * step);
-      if (there < least) {
-        least = there;
-        at = i;
+    let at: number | null = null;
+    let [before, here] = [signed(from), signed(from + step)];
+    if (before < here) least = before; // an end where the data end: no extreme
+    for (let i = 1; i < count; i++) {
+      const after = signed(i + 1 === count ? to : from + (i + 1) * step);
+      if (here <= before && here < after) {
+        const moment = brentMinimum(signed, from + (i - 1) * step, from + (i + 1) * step, 0.1);
+        const there = signed(moment);
+        if (there < least) [least, at] = [there, moment];
       }
+      [before, here] = [here, after];
     }
-    if (at === 0 || at === count) return null; // the data end before it
-    return brentMinimum((tdb) => sign * distance(tdb), from + (at - 1) * step, from + (at + 1) * step, 0.1);
+    return here < least ? null : at;
   }
 
   /** Lit part of the disk: (1 + cos i) / 2, with i the angle at the body between Sun and site. */
