@@ -51,7 +51,6 @@ function outputFailed(error: Error): ApsidaryError {
 async function wholeFile(given: string): Promise<Destination> {
   const { path, mode } = await writable(given);
   const temporary = join(dirname(path), `.${basename(path)}.${randomBytes(6).toString("hex")}.part`);
-  const handle = await refusing(given, () => open(temporary, "wx"));
   const remove = () => {
     try {
       unlinkSync(temporary);
@@ -59,7 +58,11 @@ async function wholeFile(given: string): Promise<Destination> {
       // it is gone already, or was never there
     }
   };
-  const forget = onInterrupt(remove);
+  const forget = onInterrupt(remove); // before there is a file, so that no moment is left between
+  const handle = await refusing(given, () => open(temporary, "wx")).catch((error: unknown) => {
+    forget();
+    throw error;
+  });
   return {
     write: (text) => refusing(given, () => handle.writeFile(text)),
     finish: () =>

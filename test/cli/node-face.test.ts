@@ -17,7 +17,7 @@ beforeAll(() => {
 });
 afterAll(() => rmSync(folder, { recursive: true }));
 
-const without = { builtIn: false, engine: false } as const;
+const without = { builtIn: false, series: false, engine: false } as const;
 
 describe("openSources of apsidary/node", () => {
   test("takes a kernel by its path and calls it by its file name", async () => {
