@@ -118,7 +118,7 @@ function yearsOf(given: string, zone: string): number | readonly [number, number
   if (first === undefined) {
     throw new ApsidaryError(
       "bad-date",
-      `${shown(given)} is no year; give four digits such as 2027, several such as 2027-2030, or next.`,
+      `${shown(given)} is not a year; give four digits such as 2027, several such as 2027-2030, or next.`,
     );
   }
   return last === undefined ? Number(first) : [Number(first), Number(last)];
