@@ -1,6 +1,8 @@
 export { AU_KM } from "./bodies/constants.ts";
 export { allPairs, type Pair, type PairName, pairOf } from "./bodies/pair.ts";
 export { type ApsisKind, type ApsisRank, termOf } from "./bodies/term.ts";
+export * from "./calendar/index.ts";
+export * from "./drift/index.ts";
 export {
   type Coverage,
   type Ephemeris,
@@ -20,6 +22,7 @@ export { type Range, rangeAt } from "./passages/range-at.ts";
 export { rangeTrack, type TrackedRange, type TrackQuery } from "./passages/range-track.ts";
 export type { SourceChoice } from "./passages/timeline-for.ts";
 export { type PassageRow, toRow } from "./passages/to-row.ts";
+export { openSky, type Sky } from "./sky/open-sky.ts";
 export { builtInLeapSeconds, type LeapSecondList, parseLeapSeconds } from "./time/leap-seconds.ts";
 export { dateTimeOfMoment as dateTimeOf, type TimeScales, utcOfMoment as utcOf } from "./time/of-moment.ts";
 export { type Moment, tdbOf } from "./time/tdb-of.ts";
