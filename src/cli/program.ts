@@ -3,6 +3,7 @@ import { addAudit } from "./audit.ts";
 import { addCalendar } from "./calendar.ts";
 import { addDrift } from "./drift-command.ts";
 import { addPassages } from "./passages.ts";
+import { addPlan } from "./plan.ts";
 import { addRange } from "./range.ts";
 import { addSources } from "./sources.ts";
 import { version } from "./version.ts";
@@ -37,6 +38,7 @@ read or written, and nothing was written; 70 a defect of the program itself.`,
   addCalendar(program);
   addDrift(program);
   addAudit(program);
+  addPlan(program);
   addSources(program);
   return program;
 }
