@@ -76,14 +76,13 @@ const YEAR_SECONDS = 365.25 * DAY_SECONDS;
  *   `not-covered`
  */
 export function apsisCalendar(ephemeris: Ephemeris, query: CalendarQuery): Generator<CalendarRow, void, undefined> {
-  const { first, last, from, to } = calendarSpan(ephemeris, query);
+  const { first, from, to } = calendarSpan(ephemeris, query);
   const style = completeStyle(query.style);
   const pairs = [...(query.pairs ?? CALENDAR_PAIRS)].map((pair) => pairOf(pair));
   const { source = "auto", rank = "all" } = query;
-  // refuses what cannot be answered, at the call
-  mergedPassages(ephemeris, pairs, { from: { tdbSeconds: from }, to: { tdbSeconds: to }, source });
+  const found = mergedPassages(ephemeris, pairs, { from: { tdbSeconds: from }, to: { tdbSeconds: to }, source, rank });
   const maker: Maker = { ephemeris, zone: query.zone, style, source, histories: new Map() };
-  return yearByYear(maker, pairs, first, last, rank);
+  return yearByYear(maker, found, first);
 }
 
 /** The years of a calendar and the TDB seconds past J2000 between which they lie. */
@@ -134,26 +133,25 @@ interface Maker {
   readonly histories: Map<string, PassageHistory>;
 }
 
-function* yearByYear(
-  maker: Maker,
-  pairs: readonly Pair[],
-  first: number,
-  last: number,
-  rank: "principal" | "all",
-): Generator<CalendarRow, void, undefined> {
-  const { ephemeris, zone, source } = maker;
-  let from = startOfYear(ephemeris, first, zone);
-  for (let year = first; year <= last; year++) {
-    const to = startOfYear(ephemeris, year + 1, zone);
-    // a zone that skipped New Year's Day with all of a year's beginning does not exist, but an empty span would be refused
-    if (from < to) {
-      const query = { from: { tdbSeconds: from }, to: { tdbSeconds: to }, source, rank };
-      const found = [...mergedPassages(ephemeris, pairs, query)];
-      const extremes = extremesOf(found);
-      for (const passage of found) yield rowOf(maker, passage, extremes.has(passage));
+/** The passages of a year are gathered before the first of its rows, since what is the most extreme shows only then. */
+function* yearByYear(maker: Maker, found: Iterable<Passage>, first: number): Generator<CalendarRow, void, undefined> {
+  let year = first;
+  let end = startOfYear(maker.ephemeris, year + 1, maker.zone);
+  let gathered: Passage[] = [];
+  for (const passage of found) {
+    if (passage.tdbSeconds >= end) {
+      yield* rowsOf(maker, gathered);
+      gathered = [];
+      while (passage.tdbSeconds >= end) end = startOfYear(maker.ephemeris, ++year + 1, maker.zone);
     }
-    from = to;
+    gathered.push(passage);
   }
+  yield* rowsOf(maker, gathered);
+}
+
+function* rowsOf(maker: Maker, found: readonly Passage[]): Generator<CalendarRow, void, undefined> {
+  const extremes = extremesOf(found);
+  for (const passage of found) yield rowOf(maker, passage, extremes.has(passage));
 }
 
 /** The passages that are the most extreme of a pair and kind beyond doubt. */
@@ -250,11 +248,10 @@ function yearOf(tdb: number): number {
 }
 
 function historyOf(maker: Maker, pair: Pair, passage: Passage): PassageHistory {
-  const key = `${pair.name} ${passage.kind}`;
-  let history = maker.histories.get(key);
+  let history = maker.histories.get(pair.name);
   if (!history || passage.tdbSeconds > history.to) {
-    history = passageHistory(maker.ephemeris, pair, passage.kind, passage.tdbSeconds, maker.source);
-    maker.histories.set(key, history);
+    history = passageHistory(maker.ephemeris, pair, passage.tdbSeconds, maker.source);
+    maker.histories.set(pair.name, history);
   }
   return history;
 }
@@ -282,7 +279,7 @@ function recordOf(maker: Maker, pair: Pair, passage: Passage): RecordFound | nul
   const lookedTo = Math.min(history.to, tdb + LOOK_YEARS * YEAR_SECONDS);
   let outdone = 0;
   let since: Rival | null = null;
-  for (const other of history.before(tdb)) {
+  for (const other of history.before(tdb, passage.kind)) {
     if (other.tdb < lookedFrom) break;
     since = rivalOf(passage, other);
     if (since) break;
@@ -290,7 +287,7 @@ function recordOf(maker: Maker, pair: Pair, passage: Passage): RecordFound | nul
   }
   if (outdone < RECORD_PASSAGES || (since?.tdb ?? lookedFrom) > tdb - RECORD_YEARS * YEAR_SECONDS) return null;
   let until: Rival | null = null;
-  for (const other of history.after(tdb)) {
+  for (const other of history.after(tdb, passage.kind)) {
     if (other.tdb > lookedTo) break;
     until = rivalOf(passage, other);
     if (until) break;
@@ -308,7 +305,7 @@ function rivalOf(passage: Passage, other: PastPassage): Rival | null {
 /** Hours by which the Earth's date is later than that of the passage before. */
 function dateStepOf(maker: Maker, pair: Pair, passage: Passage): number | null {
   if (pair.name !== "earth-sun" && pair.name !== "emb-sun") return null;
-  for (const last of historyOf(maker, pair, passage).before(passage.tdbSeconds)) {
+  for (const last of historyOf(maker, pair, passage).before(passage.tdbSeconds, passage.kind)) {
     const { day } = utcOf(passage.tdbSeconds, maker.ephemeris.leapSeconds);
     const date = gregorianOfDay(day);
     const wholeDays = day - dayOfGregorian(date.year - 1, date.month, date.day);

@@ -7,39 +7,34 @@ import { type SourceChoice, timelineFor } from "../passages/timeline-for.ts";
 export interface PastPassage {
   /** TDB seconds past J2000. */
   readonly tdb: number;
+  readonly kind: ApsisKind;
   readonly distanceKm: number;
   /** Half-width of the distance, km. */
   readonly uncertaintyKm: number;
 }
 
-/** The passages of one kind of a pair, looked up where they are asked for and kept. */
+/** The passages of a pair, looked up where they are asked for and kept. */
 export interface PassageHistory {
   /** Where the sources hold the pair, TDB seconds past J2000. */
   readonly from: number;
   readonly to: number;
-  /** Gives the passages before an instant, the latest first. */
-  before(tdb: number): Generator<PastPassage, void, undefined>;
-  /** Gives the passages after an instant, the earliest first. */
-  after(tdb: number): Generator<PastPassage, void, undefined>;
+  /** Gives the passages of a kind before an instant, the latest first. */
+  before(tdb: number, kind: ApsisKind): Generator<PastPassage, void, undefined>;
+  /** Gives the passages of a kind after an instant, the earliest first. */
+  after(tdb: number, kind: ApsisKind): Generator<PastPassage, void, undefined>;
 }
 
-/** Passages of a stretch that is searched at a time. */
-const PER_STRETCH = 40;
+/** Periods of a stretch that is searched at a time. */
+const PER_STRETCH = 24;
 /** An instant found again may differ by rounding. */
 const SAME = 1;
 
 /**
- * Makes the history of a pair and kind about an instant; stretches of time are searched when they are first needed, and each once.
+ * Makes the history of a pair about an instant; stretches of time are searched when they are first needed, and each once.
  *
  * Extrema are taken without their rank: a secondary one is never the most extreme of its neighbours.
  */
-export function passageHistory(
-  ephemeris: Ephemeris,
-  pair: Pair,
-  kind: ApsisKind,
-  near: number,
-  choice: SourceChoice,
-): PassageHistory {
+export function passageHistory(ephemeris: Ephemeris, pair: Pair, near: number, choice: SourceChoice): PassageHistory {
   const timeline = timelineFor(ephemeris, pair, choice);
   const { from, to } = timeline.covered.find((span) => span.from <= near && near <= span.to) ?? {
     from: near,
@@ -59,9 +54,10 @@ export function passageHistory(
     const found: PastPassage[] = [];
     const next = timeline.extremaFrom(start);
     for (let it = next(); it && it.tdb < end; it = next()) {
-      if (it.kind !== kind || it.tdb < start) continue;
+      if (it.tdb < start) continue;
       found.push({
         tdb: it.tdb,
+        kind: it.kind,
         distanceKm: it.supply.range.distance(it.tdb),
         uncertaintyKm: it.supply.source.accuracy(pair, it.tdb).rangeKm,
       });
@@ -71,14 +67,20 @@ export function passageHistory(
   return {
     from,
     to,
-    *before(tdb) {
+    *before(tdb, kind) {
       for (let index = Math.floor(tdb / stretch); (index + 1) * stretch > from; index--) {
-        for (const passage of [...inStretch(index)].reverse()) if (passage.tdb < tdb - SAME) yield passage;
+        const found = inStretch(index);
+        for (let i = found.length - 1; i >= 0; i--) {
+          const passage = found[i] as PastPassage;
+          if (passage.kind === kind && passage.tdb < tdb - SAME) yield passage;
+        }
       }
     },
-    *after(tdb) {
+    *after(tdb, kind) {
       for (let index = Math.floor(tdb / stretch); index * stretch < to; index++) {
-        for (const passage of inStretch(index)) if (passage.tdb > tdb + SAME) yield passage;
+        for (const passage of inStretch(index)) {
+          if (passage.kind === kind && passage.tdb > tdb + SAME) yield passage;
+        }
       }
     },
   };
