@@ -13,6 +13,12 @@ export {
 export type { Accuracy, AccuracyBasis, Motion, Source, Span } from "./ephemeris/source.ts";
 export type { KernelAccuracy } from "./ephemeris/user-kernel.ts";
 export { ApsidaryError, type ErrorCode } from "./error.ts";
+export type { Orbit, OrbitField } from "./orbit/orbit.ts";
+export { orbitFrom } from "./orbit/orbit-from.ts";
+export type { OrbitGiven } from "./orbit/orbit-given.ts";
+export { parseQuantity, type Quantity } from "./orbit/quantity.ts";
+export { type ApsisTerms, type ApsisWords, type Centre, terms } from "./orbit/terms.ts";
+export { type BodyShare, type TwoBodyShares, twoBodyShares } from "./orbit/two-body-shares.ts";
 export { mergedPassages } from "./passages/merged-passages.ts";
 export { type Nearness, type NearWindow, nearWindow } from "./passages/near-window.ts";
 export { type NeighbourOptions, nextPassage, previousPassage } from "./passages/next-passage.ts";

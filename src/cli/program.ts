@@ -2,6 +2,7 @@ import { Command } from "commander";
 import { addAudit } from "./audit.ts";
 import { addCalendar } from "./calendar.ts";
 import { addDrift } from "./drift-command.ts";
+import { addOrbit } from "./orbit.ts";
 import { addPassages } from "./passages.ts";
 import { addPlan } from "./plan.ts";
 import { addRange } from "./range.ts";
@@ -39,6 +40,7 @@ read or written, and nothing was written; 70 a defect of the program itself.`,
   addDrift(program);
   addAudit(program);
   addPlan(program);
+  addOrbit(program);
   addSources(program);
   return program;
 }
