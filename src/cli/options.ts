@@ -9,6 +9,12 @@ export type Format = (typeof FORMATS)[number];
 
 const CHOICES = ["auto", "kernel", "series", "engine"] as const satisfies readonly SourceChoice[];
 
+const CALENDARS = ["gregorian", "julian"] as const;
+/** The calendar of dates before 1582-10-15. */
+export type Calendar = (typeof CALENDARS)[number];
+/** What the title of a report adds where the calendar is Julian. */
+export const JULIAN_TITLE = " (Julian calendar before 1582-10-15)";
+
 /** The options that several commands share, as given. */
 export interface SharedOptions {
   readonly source?: string;
@@ -43,6 +49,19 @@ export function addDataFiles(command: Command): Command {
 export function addAnswerOptions(command: Command, formats: readonly Format[] = FORMATS): Command {
   if (formats.length > 1) command.option("--format <form>", `${formats.join(" | ")} (default: text)`);
   return command.option("--out <file>", "write the answer to this file, whole or not at all");
+}
+
+/** Adds the option that says in which calendar dates before 1582-10-15 are given and told. */
+export function addCalendarOption(command: Command): Command {
+  return command.option(
+    "--calendar <which>",
+    `${CALENDARS.join(" | ")}: of dates before 1582-10-15, given and printed; gregorian carries that calendar back, as ISO 8601 does (default: gregorian)`,
+  );
+}
+
+/** Gives the calendar of dates before 1582-10-15. @throws ApsidaryError `bad-option` */
+export function calendarOf({ calendar }: { readonly calendar?: string }): Calendar {
+  return choiceOf("--calendar", calendar ?? "gregorian", CALENDARS);
 }
 
 /** Gives the form of the answer. @throws ApsidaryError `bad-option` */

@@ -7,11 +7,22 @@ import { textTable } from "../report/text-table.ts";
 import { wrapped } from "../report/wrapped.ts";
 import { cautionsOf } from "./cautions.ts";
 import { footOf } from "./foot.ts";
-import { printedUtc } from "./printed-utc.ts";
+import { printedJulian, printedUtc } from "./printed-utc.ts";
 import type { Provenance } from "./provenance.ts";
 
-const COLUMNS: readonly Column<PassageRow>[] = [
-  { title: "UTC", unit: "", values: (row) => printedUtc(row.utc, row.utcUncertaintySeconds), digits: 0 },
+/** A row of `passages` as it is given out. */
+export interface ListedPassage extends PassageRow {
+  /** `utc` in the Julian calendar, `null` from 1582-10-15 on; only where that calendar was asked for. */
+  readonly utcJulian?: string | null;
+}
+
+const COLUMNS: readonly Column<ListedPassage>[] = [
+  {
+    title: "UTC",
+    unit: "",
+    values: (row) => julianOf(row) ?? printedUtc(row.utc, row.utcUncertaintySeconds),
+    digits: 0,
+  },
   { title: "known to", unit: "", values: (row) => durationText(row.utcUncertaintySeconds), digits: 0 },
   { title: "pair", unit: "", values: (row) => row.pair, digits: 0 },
   { title: "passage", unit: "", values: shortTerm, digits: 0 },
@@ -32,6 +43,7 @@ const MARKS = {
   "rank unknown": "the sources end too near to tell whether it is principal or secondary",
   uncertain: "the source's error could merge it with its neighbour",
   UT: "before 1972 times are UT1, reckoned with ΔT",
+  Julian: "a date of the Julian calendar; dates of rows without this mark, and in the lines below, are Gregorian",
   predicted: "after the leap-second list expires; its last offset is held",
   assumed: "a kernel of unknown accuracy, taken to be as good as the built-in one",
 } as const;
@@ -49,7 +61,7 @@ const MARK_NAMES = Object.keys(MARKS) as readonly Mark[];
  */
 export function* passagesReport(
   title: string,
-  rows: Iterable<PassageRow>,
+  rows: Iterable<ListedPassage>,
   made: Provenance,
 ): Generator<string, void, undefined> {
   let count = 0;
@@ -79,16 +91,22 @@ function shortTerm(row: PassageRow): string {
   return row.term.replace(/ of distance$/, "");
 }
 
+/** The time as it is printed in the Julian calendar; `null` where it is not. */
+function julianOf(row: ListedPassage): string | null {
+  return row.utcJulian === undefined ? null : printedJulian(row.utc, row.utcUncertaintySeconds);
+}
+
 function halfWidth(row: PassageRow) {
   return printedHalfWidth(row.distanceUncertaintyKm);
 }
 
-function marksOf(row: PassageRow): Mark[] {
+function marksOf(row: ListedPassage): Mark[] {
   const marks: Mark[] = [];
   if (row.rank === "secondary") marks.push("secondary");
   if (row.rank === null) marks.push("rank unknown");
   if (row.existence === "uncertain") marks.push("uncertain");
   if (row.utcBasis === "delta-t") marks.push("UT");
+  if (julianOf(row) !== null) marks.push("Julian");
   if (row.utcBasis === "predicted") marks.push("predicted");
   if (row.accuracyBasis === "assumed") marks.push("assumed");
   return marks;

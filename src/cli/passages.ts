@@ -1,5 +1,5 @@
 import type { Command } from "commander";
-import { addAnswerOptions, addSourceOptions, type SharedOptions } from "./options.ts";
+import { addAnswerOptions, addCalendarOption, addSourceOptions, type SharedOptions } from "./options.ts";
 import { pairsHelp } from "./pairs.ts";
 
 /** The options of `passages`, as given. */
@@ -9,6 +9,7 @@ export interface PassagesOptions extends SharedOptions {
   readonly next?: string;
   readonly kind?: string;
   readonly rank?: string;
+  readonly calendar?: string;
 }
 
 /** Adds the command that lists passages. */
@@ -32,7 +33,7 @@ export function addPassages(program: Command): void {
       "--rank <rank>",
       "principal | all; principal leaves out lesser extremes beside a greater one (default: all)",
     );
-  addAnswerOptions(addSourceOptions(command))
+  addAnswerOptions(addSourceOptions(addCalendarOption(command)))
     .addHelpText(
       "after",
       `
@@ -43,6 +44,7 @@ Examples:
   apsidary passages earth-sun,moon-earth --from 2027-01-01 --to 2027-02-01T00:00+13:00
   apsidary passages mars-sun --from 2027 --next 3 --kind periapsis
   apsidary passages neptune-sun --from 2040 --to 2055 --rank principal
+  apsidary passages moon-earth --from 1066-09-25 --next 2 --calendar julian
   apsidary passages moon-earth --from 2027 --to 2047 --format csv --out moon.csv`,
     )
     .action(async (words: string[], options: PassagesOptions) => {

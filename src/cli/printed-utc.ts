@@ -1,5 +1,6 @@
-import { printedTime } from "../report/printed-time.ts";
+import { printedTime, roundedClock } from "../report/printed-time.ts";
 import { printedUnit } from "../report/printed-unit.ts";
+import { julianText } from "../time/julian-text.ts";
 
 /**
  * Gives the reading of a clock that shows the time of an ISO text without a zone or with `Z`, in milliseconds as `roundedClock`
@@ -14,4 +15,19 @@ export function clockOf(iso: string): number {
 export function printedUtc(iso: string, uncertaintySeconds: number): string {
   const unit = printedUnit(uncertaintySeconds);
   return printedTime(clockOf(iso), unit) + (unit === "hour" ? "h" : "");
+}
+
+/** Gives what `printedUtc` gives, with the date in the Julian calendar; `null` where what it gives is 1582-10-15 or later. */
+export function printedJulian(iso: string, uncertaintySeconds: number): string | null {
+  const julian = julianText(new Date(roundedClock(clockOf(iso), printedUnit(uncertaintySeconds))).toISOString());
+  if (julian === null) return null;
+  const gregorian = printedUtc(iso, uncertaintySeconds);
+  const afterYear = gregorian.slice(endOfYear(gregorian)); // of the same length, whichever calendar
+  const kept = julian.slice(0, endOfYear(julian) + afterYear.replace("h", "").length).replace("T", " ");
+  return afterYear.endsWith("h") ? `${kept}h` : kept;
+}
+
+function endOfYear(iso: string): number {
+  const end = iso.indexOf("-", 1);
+  return end < 0 ? iso.length : end;
 }

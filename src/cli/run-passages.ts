@@ -5,20 +5,21 @@ import { mergedPassages } from "../passages/merged-passages.ts";
 import type { Passage } from "../passages/passage.ts";
 import type { PassageQuery } from "../passages/passages.ts";
 import { timelineFor } from "../passages/timeline-for.ts";
-import { type PassageRow, toRow } from "../passages/to-row.ts";
+import { toRow } from "../passages/to-row.ts";
+import { julianText } from "../time/julian-text.ts";
 import { answerPieces } from "./answer-pieces.ts";
 import { choiceOf, shown } from "./choice-of.ts";
-import { edgeOf, requireOrder } from "./edge.ts";
+import { edgeOf, requireOrder, tellingCalendar } from "./edge.ts";
 import { openFor } from "./open-for.ts";
-import { formatOf, sourceChoiceOf } from "./options.ts";
+import { type Calendar, calendarOf, formatOf, JULIAN_TITLE, sourceChoiceOf } from "./options.ts";
 import { pairsOf } from "./pairs.ts";
 import type { PassagesOptions } from "./passages.ts";
-import { passagesReport } from "./passages-report.ts";
+import { type ListedPassage, passagesReport } from "./passages-report.ts";
 import { mayShowProgress, withProgress } from "./progress.ts";
 import { provenanceOf } from "./provenance.ts";
 import { writeAnswer } from "./write-answer.ts";
 
-const NAMES: readonly (keyof PassageRow)[] = [
+const NAMES: readonly (keyof ListedPassage)[] = [
   "pair",
   "targetPoint",
   "centrePoint",
@@ -52,34 +53,45 @@ export async function runPassages(words: readonly string[], options: PassagesOpt
   const source = sourceChoiceOf(options);
   const kind = choiceOf("--kind", options.kind ?? "both", ["periapsis", "apoapsis", "both"]);
   const rank = choiceOf("--rank", options.rank ?? "all", ["principal", "all"]);
+  const calendar = calendarOf(options);
   const count = countOf(options);
   const pairs = pairsOf(words);
 
   const ephemeris = await openFor(options);
-  const from = edgeOf("--from", options.from, ephemeris.leapSeconds);
+  const edge = (option: "--from" | "--to", given?: string) => edgeOf(option, given, ephemeris.leapSeconds, calendar);
+  const from = edge("--from", options.from);
   const what = { kind, rank, source };
   const to =
-    count === null ? edgeOf("--to", options.to, ephemeris.leapSeconds) : endOfNext(ephemeris, pairs, from, count, what);
+    count === null
+      ? edge("--to", options.to)
+      : tellingCalendar(calendar, () => endOfNext(ephemeris, pairs, from, count, what));
   requireOrder(from, to, options);
-  const found = mergedPassages(ephemeris, pairs, { from: { tdbSeconds: from }, to: { tdbSeconds: to }, ...what });
+  const span = { from: { tdbSeconds: from }, to: { tdbSeconds: to } };
+  const found = tellingCalendar(calendar, () => mergedPassages(ephemeris, pairs, { ...span, ...what }));
   const made = await provenanceOf(ephemeris, { pairs, span: { from, to }, source });
 
   const watched = withProgress(found, (passage) => passage.tdbSeconds, from, to, mayShowProgress(options.out));
-  const pieces = await answerPieces<PassageRow>(format, {
+  const pieces = await answerPieces<ListedPassage>(format, {
     head: { schema: "apsidary/passages/1", made },
-    names: NAMES,
-    rows: rowsOf(watched, ephemeris, count ?? Infinity),
+    names: calendar === "julian" ? [...NAMES, "utcJulian"] : NAMES,
+    rows: rowsOf(watched, ephemeris, count ?? Infinity, calendar),
     report: (rows) => passagesReport(titleOf(pairs, options), rows, made),
   });
   await writeAnswer(pieces, options.out);
 }
 
-function* rowsOf(found: Iterable<Passage>, ephemeris: Ephemeris, most: number): Generator<PassageRow, void, undefined> {
+function* rowsOf(
+  found: Iterable<Passage>,
+  ephemeris: Ephemeris,
+  most: number,
+  calendar: Calendar,
+): Generator<ListedPassage, void, undefined> {
   let count = 0;
   for (const passage of found) {
     if (count === most) return;
     count++;
-    yield toRow(passage, ephemeris);
+    const row = toRow(passage, ephemeris);
+    yield calendar === "julian" ? { ...row, utcJulian: julianText(row.utc) } : row;
   }
 }
 
@@ -131,7 +143,8 @@ function endOfNext(
   return end;
 }
 
-function titleOf(pairs: readonly Pair[], { from = "", to, next }: PassagesOptions): string {
+function titleOf(pairs: readonly Pair[], { from = "", to, next, calendar }: PassagesOptions): string {
   const which = pairs.map((pair) => pair.name).join(", ");
-  return to === undefined ? `Passages of ${which}: ${next} from ${from} on` : `Passages of ${which}, ${from} to ${to}`;
+  const when = to === undefined ? `: ${next} from ${from} on` : `, ${from} to ${to}`;
+  return `Passages of ${which}${when}${calendar === "julian" ? JULIAN_TITLE : ""}`;
 }
