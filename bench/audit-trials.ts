@@ -1,11 +1,11 @@
-import { writeFileSync, readFileSync } from "node:fs";
-import { type GivenRow, auditList } from "../src/audit/audit-list.ts";
+import { readFileSync, writeFileSync } from "node:fs";
+import { DateTime } from "luxon";
+import { auditList, type GivenRow } from "../src/audit/audit-list.ts";
 import type { CauseName } from "../src/audit/cause.ts";
 import { CIVIL_OFFSETS, offsetText, SUMMER_ZONES } from "../src/audit/causes/civil-offsets.ts";
 import { openSources } from "../src/ephemeris/open-sources.ts";
 import { passages } from "../src/passages/passages.ts";
-import { DateTime } from "luxon";
-import { truePassages, type TruePassage } from "../test/de405/true-passages.ts";
+import { type TruePassage, truePassages } from "../test/de405/true-passages.ts";
 
 // Trials of the audit with slips that are planted, from a fixed seed: `npx tsx bench/audit-trials.ts [--write]`.
 // The truth is JPL's DE405 as read and searched by test/de405, which shares no code with the product; TT - UTC comes from a table of
@@ -65,16 +65,27 @@ function printed(clock: number, precision: Precision, rule: Rule): string {
   // a day is by either rule the one that an editor may print: that which holds the moment, or that of the nearest midnight
   const at = Math.floor(clock / step + (rule === "cut" ? 0 : 0.5)) * step;
   const text = new Date(at).toISOString();
-  return precision === "day" ? text.slice(0, 10) : precision === "hour" ? text.slice(0, 13).replace("T", " ") : text.slice(0, 16).replace("T", " ");
+  return precision === "day"
+    ? text.slice(0, 10)
+    : precision === "hour"
+      ? text.slice(0, 13).replace("T", " ")
+      : text.slice(0, 16).replace("T", " ");
 }
 /** The usual way: days hold the moment, minutes and hours are rounded. */
-const usual = (clock: number, precision: Precision): string => printed(clock, precision, precision === "day" ? "cut" : "nearest");
+const usual = (clock: number, precision: Precision): string =>
+  printed(clock, precision, precision === "day" ? "cut" : "nearest");
 
-const made = (pair: string): Made[] => truePassages(pair).filter(({ tdb }) => tdb > -28 * 365.25 * 86_400 && tdb < 26 * 365.25 * 86_400).map((p: TruePassage) => ({ pair, kind: p.kind, tdb: p.tdb, km: p.distanceKm }));
+const made = (pair: string): Made[] =>
+  truePassages(pair)
+    .filter(({ tdb }) => tdb > -28 * 365.25 * 86_400 && tdb < 26 * 365.25 * 86_400)
+    .map((p: TruePassage) => ({ pair, kind: p.kind, tdb: p.tdb, km: p.distanceKm }));
 const PAIRS = ["earth-sun", "moon-earth", "mars-sun", "mercury-sun", "venus-sun"] as const;
 const truth = new Map<string, Made[]>([...PAIRS, "emb-sun", "earth-ssb"].map((pair) => [pair, made(pair)]));
 const of = (pair: string): Made[] => truth.get(pair) ?? [];
-const nearest = (pair: string, kind: Kind, tdb: number): Made => of(pair).filter((p) => p.kind === kind).reduce((a, b) => (Math.abs(b.tdb - tdb) < Math.abs(a.tdb - tdb) ? b : a));
+const nearest = (pair: string, kind: Kind, tdb: number): Made =>
+  of(pair)
+    .filter((p) => p.kind === kind)
+    .reduce((a, b) => (Math.abs(b.tdb - tdb) < Math.abs(a.tdb - tdb) ? b : a));
 
 /** Rows in a row: a stretch of a pair's passages. */
 function stretch(pair: string, size: number): Made[] {
@@ -87,10 +98,14 @@ const ephemeris = await openSources();
 const coarse = new Map<string, { kind: Kind; tdb: number; km: number }[]>();
 for (const pair of ["earth-sun", "moon-earth", "mars-sun", "venus-sun", "mercury-sun"] as const) {
   const list = [];
-  for (const p of passages(ephemeris, pair, { from: "1973", to: "2027", source: "engine" })) list.push({ kind: p.kind, tdb: p.tdbSeconds, km: p.distanceKm });
+  for (const p of passages(ephemeris, pair, { from: "1973", to: "2027", source: "engine" }))
+    list.push({ kind: p.kind, tdb: p.tdbSeconds, km: p.distanceKm });
   coarse.set(pair, list);
 }
-const coarseOf = (p: Made) => (coarse.get(p.pair) ?? []).filter((c) => c.kind === p.kind).reduce((a, b) => (Math.abs(b.tdb - p.tdb) < Math.abs(a.tdb - p.tdb) ? b : a));
+const coarseOf = (p: Made) =>
+  (coarse.get(p.pair) ?? [])
+    .filter((c) => c.kind === p.kind)
+    .reduce((a, b) => (Math.abs(b.tdb - p.tdb) < Math.abs(a.tdb - p.tdb) ? b : a));
 
 interface Slip {
   readonly cause: CauseName;
@@ -126,20 +141,32 @@ const SLIPS: Record<string, (pair: string) => Slip | null> = {
       return clock + (fields(clock).ms < DAY_MS / 2 ? DAY_MS / 2 : -DAY_MS / 2);
     },
   }),
-  "emb-centre": (pair) => (pair !== "earth-sun" ? null : { cause: "emb-centre", clock: (p, zone) => clockOf(nearest("emb-sun", p.kind, p.tdb).tdb, zone) }),
-  "ssb-centre": (pair) => (pair !== "earth-sun" ? null : { cause: "ssb-centre", clock: (p, zone) => clockOf(nearest("earth-ssb", p.kind, p.tdb).tdb, zone) }),
-  "kind-swapped": () => ({ cause: "kind-swapped", clock: (p, zone) => clockOf(p.tdb, zone), kindWord: (kind) => (kind === "periapsis" ? "apoapsis" : "periapsis") }),
+  "emb-centre": (pair) =>
+    pair !== "earth-sun"
+      ? null
+      : { cause: "emb-centre", clock: (p, zone) => clockOf(nearest("emb-sun", p.kind, p.tdb).tdb, zone) },
+  "ssb-centre": (pair) =>
+    pair !== "earth-sun"
+      ? null
+      : { cause: "ssb-centre", clock: (p, zone) => clockOf(nearest("earth-ssb", p.kind, p.tdb).tdb, zone) },
+  "kind-swapped": () => ({
+    cause: "kind-swapped",
+    clock: (p, zone) => clockOf(p.tdb, zone),
+    kindWord: (kind) => (kind === "periapsis" ? "apoapsis" : "periapsis"),
+  }),
   "year-copied": (pair) =>
-    pair === "mars-sun" || pair === "venus-sun" ? null : {
-      cause: "year-copied",
-      clock: (p, zone) => {
-        const { y } = fields(clockOf(p.tdb, zone));
-        const other = clockOf(nearest(p.pair, p.kind, p.tdb - 365.25 * 86_400).tdb, zone);
-        const f = fields(other);
-        if (f.y !== y - 1) return null;
-        return Date.UTC(y, f.m, f.d) + f.ms;
-      },
-    },
+    pair === "mars-sun" || pair === "venus-sun"
+      ? null
+      : {
+          cause: "year-copied",
+          clock: (p, zone) => {
+            const { y } = fields(clockOf(p.tdb, zone));
+            const other = clockOf(nearest(p.pair, p.kind, p.tdb - 365.25 * 86_400).tdb, zone);
+            const f = fields(other);
+            if (f.y !== y - 1) return null;
+            return Date.UTC(y, f.m, f.d) + f.ms;
+          },
+        },
   "month-day-swapped": () => ({
     cause: "month-day-swapped",
     clock: (p, zone) => {
@@ -149,7 +176,10 @@ const SLIPS: Record<string, (pair: string) => Slip | null> = {
     },
   }),
   "julian-calendar": () => ({ cause: "julian-calendar", clock: (p, zone) => clockOf(p.tdb, zone) - 13 * DAY_MS }),
-  "light-time": (pair) => (pair === "moon-earth" ? null : { cause: "light-time", clock: (p, zone) => clockOf(p.tdb + p.km / 299_792.458, zone) }),
+  "light-time": (pair) =>
+    pair === "moon-earth"
+      ? null
+      : { cause: "light-time", clock: (p, zone) => clockOf(p.tdb + p.km / 299_792.458, zone) },
   "coarse-model": () => ({ cause: "coarse-model", clock: (p, zone) => clockOf(coarseOf(p).tdb, zone) }),
 };
 
@@ -163,7 +193,8 @@ interface Tally {
   accused: number;
 }
 const empty = (): Tally => ({ lists: 0, named: 0, other: 0, silent: 0, alternative: 0, invisible: 0, accused: 0 });
-const percent = (part: number, of: number) => (of === 0 ? "–" : `${((100 * part) / of).toFixed(part === of || part === 0 ? 0 : 1)} %`);
+const percent = (part: number, of: number) =>
+  of === 0 ? "–" : `${((100 * part) / of).toFixed(part === of || part === 0 ? 0 : 1)} %`;
 const DISTRACTED: string[] = [];
 
 /** Lists in which one slip runs through all rows. */
@@ -173,7 +204,17 @@ function wholeLists(precision: Precision, sizes: readonly number[], each: number
     for (const size of sizes) {
       const tally = empty();
       for (let i = 0; i < each; i++) {
-        const pair = ["emb-centre", "ssb-centre"].includes(name) ? "earth-sun" : pick(name === "coarse-model" ? ["earth-sun", "moon-earth", "mars-sun"] : name === "year-copied" ? ["earth-sun", "moon-earth"] : name === "light-time" ? ["earth-sun", "mars-sun"] : ["earth-sun", "moon-earth"]);
+        const pair = ["emb-centre", "ssb-centre"].includes(name)
+          ? "earth-sun"
+          : pick(
+              name === "coarse-model"
+                ? ["earth-sun", "moon-earth", "mars-sun"]
+                : name === "year-copied"
+                  ? ["earth-sun", "moon-earth"]
+                  : name === "light-time"
+                    ? ["earth-sun", "mars-sun"]
+                    : ["earth-sun", "moon-earth"],
+            );
         const slip = make(pair);
         if (!slip) continue;
         const rows: GivenRow[] = [];
@@ -193,10 +234,14 @@ function wholeLists(precision: Precision, sizes: readonly number[], each: number
           else tally.silent++;
         } else {
           tally.other++;
-          DISTRACTED.push(`whole ${name} ${precision} ${size} ${pair}: ${list.cause} ${list.causeDetail} ${JSON.stringify(rows.slice(0, 3))}`);
+          DISTRACTED.push(
+            `whole ${name} ${precision} ${size} ${pair}: ${list.cause} ${list.causeDetail} ${JSON.stringify(rows.slice(0, 3))}`,
+          );
         }
       }
-      lines.push(`| ${name} | ${precision} | ${size} | ${tally.lists} | ${percent(tally.named, tally.lists - tally.invisible)} | ${tally.other} | ${tally.alternative} | ${tally.silent} | ${tally.invisible} |`);
+      lines.push(
+        `| ${name} | ${precision} | ${size} | ${tally.lists} | ${percent(tally.named, tally.lists - tally.invisible)} | ${tally.other} | ${tally.alternative} | ${tally.silent} | ${tally.invisible} |`,
+      );
     }
   }
   return lines;
@@ -210,11 +255,14 @@ function singleSlips(precision: Precision, sizes: readonly number[], each: numbe
     for (const size of sizes) {
       const tally = empty();
       for (let i = 0; i < each; i++) {
-        const pair = ["emb-centre", "ssb-centre", "coarse-model"].includes(name) ? "earth-sun" : pick(["earth-sun", "moon-earth"]);
+        const pair = ["emb-centre", "ssb-centre", "coarse-model"].includes(name)
+          ? "earth-sun"
+          : pick(["earth-sun", "moon-earth"]);
         const slip = make(pair) ?? make("earth-sun");
         if (!slip) continue;
         const rule = pick<Rule>(["nearest", "cut"]);
-        const rightText = (clock: number) => (precision === "day" ? usual(clock, precision) : printed(clock, precision, rule));
+        const rightText = (clock: number) =>
+          precision === "day" ? usual(clock, precision) : printed(clock, precision, rule);
         const list = stretch(slip.cause === "light-time" ? "earth-sun" : pair, size);
         let at = -1;
         let wrong: number | null = null;
@@ -226,7 +274,11 @@ function singleSlips(precision: Precision, sizes: readonly number[], each: numbe
         if (wrong === null) continue;
         const rows = list.map((p, k): GivenRow => {
           const clock = k === at ? (wrong ?? 0) : clockOf(p.tdb, "UTC");
-          return { pair: p.pair, kind: k === at && slip.kindWord ? slip.kindWord(p.kind) : p.kind, when: rightText(clock) };
+          return {
+            pair: p.pair,
+            kind: k === at && slip.kindWord ? slip.kindWord(p.kind) : p.kind,
+            when: rightText(clock),
+          };
         });
         const p = list[at] as Made;
         tally.lists++;
@@ -235,7 +287,9 @@ function singleSlips(precision: Precision, sizes: readonly number[], each: numbe
         audit.rows.forEach((row, k) => {
           if (k !== at && row.verdict !== "agrees" && row.verdict !== "undecided") {
             tally.accused++;
-            DISTRACTED.push(`ACCUSED ${name} ${precision} ${size}: ${JSON.stringify(row.published)} ${row.verdict} ${row.sentence} | planted ${JSON.stringify(rows[at])} list ${audit.list.sentence}`);
+            DISTRACTED.push(
+              `ACCUSED ${name} ${precision} ${size}: ${JSON.stringify(row.published)} ${row.verdict} ${row.sentence} | planted ${JSON.stringify(rows[at])} list ${audit.list.sentence}`,
+            );
           }
         });
         if (rightText(clockOf(p.tdb, "UTC")) === rightText(wrong) && !slip.kindWord) tally.invisible++;
@@ -243,14 +297,20 @@ function singleSlips(precision: Precision, sizes: readonly number[], each: numbe
         else if (found?.verdict === "last-digit" || found?.verdict === "agrees") tally.silent++;
         else if (found?.cause) {
           tally.other++;
-          DISTRACTED.push(`single ${name} ${precision} ${size}: ${found.cause} ${found.causeDetail} ${JSON.stringify(rows[at])} diff ${found.differenceSeconds}`);
+          DISTRACTED.push(
+            `single ${name} ${precision} ${size}: ${found.cause} ${found.causeDetail} ${JSON.stringify(rows[at])} diff ${found.differenceSeconds}`,
+          );
         } else if (found?.alternatives.some(({ cause }) => cause === slip.cause)) tally.alternative++;
         else {
           tally.silent++;
-          DISTRACTED.push(`silent ${name} ${precision} ${size}: ${found?.verdict} ${JSON.stringify(rows[at])} diff ${found?.differenceSeconds} ${found?.sentence}`);
+          DISTRACTED.push(
+            `silent ${name} ${precision} ${size}: ${found?.verdict} ${JSON.stringify(rows[at])} diff ${found?.differenceSeconds} ${found?.sentence}`,
+          );
         }
       }
-      lines.push(`| ${name} | ${precision} | ${size} | ${tally.lists} | ${percent(tally.named, tally.lists - tally.invisible)} | ${tally.other} | ${tally.alternative} | ${tally.silent} | ${tally.invisible} | ${tally.accused} |`);
+      lines.push(
+        `| ${name} | ${precision} | ${size} | ${tally.lists} | ${percent(tally.named, tally.lists - tally.invisible)} | ${tally.other} | ${tally.alternative} | ${tally.silent} | ${tally.invisible} | ${tally.accused} |`,
+      );
     }
   }
   return lines;
@@ -271,7 +331,14 @@ function rightRows(): { lines: string[]; rows: number; accused: number } {
       for (const zone of zones) {
         for (const size of [1, 1, 1, 1, 1, 2, 2, 3, 5, 5, 5, 10, 26, 26, 26, 100, 100, 26]) {
           const list = stretch(pick(PAIRS), size);
-          const given = list.map((p): GivenRow => ({ pair: p.pair, kind: p.kind, when: printed(clockOf(p.tdb, zone), precision, rule), zone }));
+          const given = list.map(
+            (p): GivenRow => ({
+              pair: p.pair,
+              kind: p.kind,
+              when: printed(clockOf(p.tdb, zone), precision, rule),
+              zone,
+            }),
+          );
           const audit = auditList(ephemeris, given);
           lists++;
           if (audit.list.cause !== null && audit.list.cause !== "rounded-down") {
@@ -282,13 +349,17 @@ function rightRows(): { lines: string[]; rows: number; accused: number } {
             here++;
             if (row.verdict === "agrees" || row.verdict === "undecided") continue;
             wrong++;
-            DISTRACTED.push(`RIGHT ${precision} ${rule} ${zone} ${size}: ${JSON.stringify(row.published)} ${row.verdict} ${row.differenceSeconds} ${row.sentence}`);
+            DISTRACTED.push(
+              `RIGHT ${precision} ${rule} ${zone} ${size}: ${JSON.stringify(row.published)} ${row.verdict} ${row.differenceSeconds} ${row.sentence}`,
+            );
           }
         }
       }
       rows += here;
       accused += wrong;
-      lines.push(`| ${precision} | ${rule === "nearest" ? "rounded" : "cut off"} | ${lists} | ${here} | ${wrong} | ${findings} |`);
+      lines.push(
+        `| ${precision} | ${rule === "nearest" ? "rounded" : "cut off"} | ${lists} | ${here} | ${wrong} | ${findings} |`,
+      );
     }
   }
   return { lines, rows, accused };
@@ -297,8 +368,16 @@ function rightRows(): { lines: string[]; rows: number; accused: number } {
 const quick = process.argv.includes("--quick");
 const started = performance.now();
 const right = [rightRows(), ...(quick ? [] : [rightRows()])];
-const whole = [...wholeLists("minute", quick ? [5, 10, 26] : [5, 10, 26, 100], quick ? 8 : 40), ...(quick ? [] : wholeLists("hour", [10, 26], 12)), ...(quick ? [] : wholeLists("day", [26, 100], 8))];
-const single = [...singleSlips("minute", quick ? [1, 26] : [1, 5, 26, 100], quick ? 12 : 40), ...(quick ? [] : singleSlips("hour", [26], 20)), ...(quick ? [] : singleSlips("day", [26], 20))];
+const whole = [
+  ...wholeLists("minute", quick ? [5, 10, 26] : [5, 10, 26, 100], quick ? 8 : 40),
+  ...(quick ? [] : wholeLists("hour", [10, 26], 12)),
+  ...(quick ? [] : wholeLists("day", [26, 100], 8)),
+];
+const single = [
+  ...singleSlips("minute", quick ? [1, 26] : [1, 5, 26, 100], quick ? 12 : 40),
+  ...(quick ? [] : singleSlips("hour", [26], 20)),
+  ...(quick ? [] : singleSlips("day", [26], 20)),
+];
 const text = `<!-- trials -->
 
 Right rows: ${right.reduce((sum, { rows }) => sum + rows, 0)}, of which ${right.reduce((sum, { accused }) => sum + accused, 0)} were accused.
@@ -321,9 +400,14 @@ ${single.join("\n")}
 
 <!-- /trials -->`;
 process.stdout.write(`${text}\n`);
-process.stderr.write(`${DISTRACTED.slice(0, 400).join("\n")}\n${((performance.now() - started) / 1000).toFixed(0)} s\n`);
+process.stderr.write(
+  `${DISTRACTED.slice(0, 400).join("\n")}\n${((performance.now() - started) / 1000).toFixed(0)} s\n`,
+);
 if (process.argv.includes("--write")) {
   const file = new URL("../docs/audit.md", import.meta.url);
   const page = readFileSync(file, "utf8");
-  writeFileSync(file, page.replace(/<!-- trials -->[\s\S]*<!-- \/trials -->/, () => text));
+  writeFileSync(
+    file,
+    page.replace(/<!-- trials -->[\s\S]*<!-- \/trials -->/, () => text),
+  );
 }

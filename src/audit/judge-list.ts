@@ -10,7 +10,7 @@ import {
   LIST_SHARES,
   logSum,
   NAMED,
-  NEAR_MISS_SHARE,
+  NEAR_MISSES,
   NO_CAUSE_SHARE,
   SHIFTED,
   SLIP_SHARE,
@@ -37,6 +37,23 @@ const RULE_SHARE = 0.9;
 /** Rows that must tell before rounding up is believed. */
 const LEAST_UP = 5;
 
+/** The habits that a list may have whatever its slip: a rule of rounding, and how many of its values are one digit off. */
+interface Manner {
+  readonly rule: RoundingRule;
+  readonly nearMisses: number;
+  readonly logLikely: number;
+}
+
+function manners(): readonly Manner[] {
+  return ROUNDING_RULES.flatMap((rule) =>
+    NEAR_MISSES.map(({ share, likely }) => ({
+      rule,
+      nearMisses: share,
+      logLikely: Math.log(RULE_SHARES[rule] * likely),
+    })),
+  );
+}
+
 /**
  * Judges a list as a whole: which slip, if any, runs through it, and how it rounds.
  *
@@ -51,10 +68,12 @@ export function judgeList(cases: readonly Case[]): ListHabit {
   const every = Math.max(1, Math.ceil(cases.length / MOST_ROWS));
   const sample = every === 1 ? cases : cases.filter((_, i) => i % every === 0);
   const causes = allTimeCauses();
-  const none = [0, 0, 0];
+  const all = manners();
+  const nought = () => all.map(() => 0);
+  const none = nought();
   const sums = new Map<string, { cause: TimeCause; detail: string; share: number; rows: number; more: number[] }>();
   for (const one of sample) {
-    const plain = ROUNDING_RULES.map((rule) => logRow(one, rule, one.residual, one.bound));
+    const plain = all.map((manner) => logRow(one, manner, one.residual, one.bound));
     plain.forEach((log, i) => {
       none[i] = (none[i] ?? 0) + log;
     });
@@ -63,20 +82,22 @@ export function judgeList(cases: readonly Case[]): ListHabit {
         const key = `${cause.name} ${detailOfList(cause.name, detail)}`;
         let sum = sums.get(key);
         if (!sum) {
-          sum = { cause, detail: detailOfList(cause.name, detail), share, rows: 0, more: [0, 0, 0] };
+          sum = { cause, detail: detailOfList(cause.name, detail), share, rows: 0, more: nought() };
           sums.set(key, sum);
         }
         sum.rows++;
-        ROUNDING_RULES.forEach((rule, i) => {
-          sum.more[i] = (sum.more[i] ?? 0) + logRow(one, rule, residual, bound) - (plain[i] ?? 0);
+        all.forEach((manner, i) => {
+          sum.more[i] = (sum.more[i] ?? 0) + logRow(one, manner, residual, bound) - (plain[i] ?? 0);
         });
       }
     }
   }
-  const overRules = (logs: readonly number[]) =>
-    logSum(logs.map((log, i) => log + Math.log(RULE_SHARES[ROUNDING_RULES[i] as RoundingRule])));
+  const overRules = (logs: readonly number[]) => logSum(logs.map((log, i) => log + (all[i]?.logLikely ?? 0)));
   const noneLog = overRules(none) + Math.log(NO_CAUSE_SHARE);
-  const constant = constantLog(sample);
+  const constant = constantLog(
+    sample,
+    all.filter(({ rule }) => rule === "usual"),
+  );
   const variants = [...sums.values()].map((sum) => ({
     ...sum,
     log:
@@ -163,16 +184,16 @@ export function predictionOf(one: Case, cause: TimeCause, detail: string): Predi
   return cause.predict(one).find((each) => detailOfList(cause.name, each.detail) === detail) ?? null;
 }
 
-function logRow(one: Case, rule: RoundingRule, residual: number, bound: number): number {
+function logRow(one: Case, { rule, nearMisses }: Manner, residual: number, bound: number): number {
   return Math.log(
-    (1 - SLIP_SHARE - NEAR_MISS_SHARE) * ruleDensity(one.when, rule, residual, bound) +
-      NEAR_MISS_SHARE * nearMissDensity(one.when, rule, residual, bound) +
+    (1 - SLIP_SHARE - nearMisses) * ruleDensity(one.when, rule, residual, bound) +
+      nearMisses * nearMissDensity(one.when, rule, residual, bound) +
       SLIP_SHARE * chanceDensity(residual),
   );
 }
 
 /** One amount of any size through the whole list, summed over all amounts near the median. */
-function constantLog(sample: readonly Case[]): { log: number; seconds: number } {
+function constantLog(sample: readonly Case[], all: readonly Manner[]): { log: number; seconds: number } {
   if (sample.length < 2) return { log: -Infinity, seconds: 0 };
   const sorted = sample.map(({ residual }) => residual).sort((a, b) => a - b);
   const median = sorted[sorted.length >> 1] ?? 0;
@@ -185,8 +206,12 @@ function constantLog(sample: readonly Case[]): { log: number; seconds: number } 
   for (let i = 0; i <= steps; i++) {
     const amount = median + (i - steps / 2) * step;
     if (Math.abs(amount) < unit / 2) continue;
-    let log = Math.log(CONSTANT_SHARE) + Math.log(amountDensity(amount) * step);
-    for (const one of sample) log += logRow(one, "usual", one.residual - amount, one.bound);
+    const sums = all.map((manner) => {
+      let sum = manner.logLikely;
+      for (const one of sample) sum += logRow(one, manner, one.residual - amount, one.bound);
+      return sum;
+    });
+    const log = Math.log(CONSTANT_SHARE * amountDensity(amount) * step) + logSum(sums);
     logs.push(log);
     if (log > best) {
       best = log;
@@ -238,10 +263,12 @@ function wholeListRule(
   const clocks = rows.filter(({ when }) => !when.whole);
   if (clocks.length < LEAST_UP || clocks.length < rows.length / 2) return null;
   const found = new Set(clocks.map(({ when }) => rules.get(unitKey(when))));
-  const [usual = 0, other = 0, up = 0] = logs;
-  const ahead = (log: number, share: number) => log + Math.log(share) - usual - Math.log(RULE_SHARES.usual);
-  if (found.has("other") && ahead(other, RULE_SHARES.other) >= Math.log(NAMED)) return "rounded-down";
-  if (found.has("up") && ahead(up, RULE_SHARES.up) >= Math.log(NAMED)) return "rounded-up";
+  const all = manners();
+  const logOf = (rule: RoundingRule) =>
+    logSum(all.map((manner, i) => (manner.rule === rule ? (logs[i] ?? 0) + manner.logLikely : -Infinity)));
+  const usual = logOf("usual");
+  if (found.has("other") && logOf("other") - usual >= Math.log(NAMED)) return "rounded-down";
+  if (found.has("up") && logOf("up") - usual >= Math.log(NAMED)) return "rounded-up";
   return null;
 }
 
@@ -271,8 +298,12 @@ function sentenceOf(
     return `The whole list is off by about ${signedDuration(constant)}, and no known cause gives that.`;
   }
   if (rounding) return `No cause runs through the list; ${rounding}.`;
+  const causes = alternatives.map(({ cause, causeDetail }) => (causeDetail ? `${cause} (${causeDetail})` : cause));
+  const [only] = alternatives;
+  if (only && alternatives.length === 1) {
+    return `${causes.join("")} may run through the list, at odds of ${only.odds} to 1: the rows do not make it certain.`;
+  }
   if (alternatives.length > 1) {
-    const causes = alternatives.map(({ cause, causeDetail }) => (causeDetail ? `${cause} (${causeDetail})` : cause));
     return `The rows do not tell apart ${causes.join(" and ")}.`;
   }
   if (rows === 0) return "No row could be held against a passage.";

@@ -46,11 +46,18 @@ export const LIST_SHARES: Readonly<Partial<Record<CauseName, number>>> = Object.
 });
 export const NO_CAUSE_SHARE = 0.8;
 /** A whole list off by one amount that no cause explains. */
-export const CONSTANT_SHARE = 0.004;
+export const CONSTANT_SHARE = 0.002;
 
-/** Among the rows of a list: slips of any kind, and values one digit off. */
+/** Slips of any kind among the rows of a list. */
 export const SLIP_SHARE = 0.08;
-export const NEAR_MISS_SHARE = 0.04;
+/**
+ * Values one digit off among the rows of a list: few in a list that was made with as much care as its digits promise, half in one whose source
+ * scatters by more than its last digit (handbooks from older theories do); and how likely each sort of list is.
+ */
+export const NEAR_MISSES: readonly { readonly share: number; readonly likely: number }[] = Object.freeze([
+  { share: 0.04, likely: 0.9 },
+  { share: 0.5, likely: 0.1 },
+]);
 
 const DAY = 86_400;
 /** Errors by chance are taken to be at least so large, and at most. */
