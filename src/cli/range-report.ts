@@ -54,7 +54,8 @@ export function* rangeReport(
   };
   yield `${title}\n\n`;
   yield* textTable(columnsFor(pair, ephemeris), watched());
-  yield "\nDistances are geometric, from centre to centre at one instant, to the place of their uncertainty at this UTC.\n";
+  yield "\nDistances are geometric, from centre to centre at one instant, to the place of their uncertainty,\n";
+  yield "  what they change in the time by which UTC is uncertain included.\n";
   yield "share: 0 at the periapsis, 1 at the apoapsis on either side, by distance.\n";
   if (julian)
     yield "J: a date of the Julian calendar; dates of rows without it, and in the lines below, are Gregorian.\n";
