@@ -1,6 +1,7 @@
 export { AU_KM } from "./bodies/constants.ts";
 export { allPairs, type Pair, type PairName, pairOf } from "./bodies/pair.ts";
 export { type ApsisKind, type ApsisRank, termOf } from "./bodies/term.ts";
+export { isTrackPair, type TrackPair, trackPair } from "./bodies/track-pair.ts";
 export * from "./calendar/index.ts";
 export * from "./drift/index.ts";
 export {
@@ -22,12 +23,12 @@ export { type BodyShare, type TwoBodyShares, twoBodyShares } from "./orbit/two-b
 export { mergedPassages } from "./passages/merged-passages.ts";
 export { type Nearness, type NearWindow, nearWindow } from "./passages/near-window.ts";
 export { type NeighbourOptions, nextPassage, previousPassage } from "./passages/next-passage.ts";
-export type { Passage } from "./passages/passage.ts";
+export { isTrackPassage, type Passage, type TrackPassage } from "./passages/passage.ts";
 export { type PassageQuery, passages } from "./passages/passages.ts";
 export { type Range, rangeAt } from "./passages/range-at.ts";
 export { rangeTrack, type TrackedRange, type TrackQuery } from "./passages/range-track.ts";
 export type { SourceChoice } from "./passages/timeline-for.ts";
-export { type PassageRow, toRow } from "./passages/to-row.ts";
+export { type PassageRow, type TrackRow, toRow } from "./passages/to-row.ts";
 export { openSky, type Sky } from "./sky/open-sky.ts";
 export { builtInLeapSeconds, type LeapSecondList, parseLeapSeconds } from "./time/leap-seconds.ts";
 export { dateTimeOfMoment as dateTimeOf, type TimeScales, utcOfMoment as utcOf } from "./time/of-moment.ts";

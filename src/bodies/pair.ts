@@ -11,8 +11,8 @@ type Orbiter = Planet | "earth" | "emb" | "pluto";
 export type PairName = `${Orbiter}-sun` | `${Orbiter}-ssb` | "moon-earth" | `${JupiterMoon}-jupiter`;
 
 /** A moving point and the centre from which its distance is measured. */
-export interface Pair {
-  readonly name: PairName;
+export interface Pair<Name extends string = PairName> {
+  readonly name: Name;
   /** SPK id of the moving point. */
   readonly target: PointId;
   /** SPK id of the centre. */
@@ -21,6 +21,8 @@ export interface Pair {
   readonly sampleSeconds: number;
   /** Half the sidereal period, seconds: how far rank looks to either side. */
   readonly halfPeriodSeconds: number;
+  /** Half the width of the last bracket of a passage, seconds, where orbits are quick; left out, that of the slow ones. */
+  readonly toleranceSeconds?: number;
 }
 
 /**
@@ -96,7 +98,9 @@ export function allPairs(): readonly Pair[] {
  * @param name as in `PairName`; a pair itself is given back
  * @throws ApsidaryError `bad-pair`, with the nearest name
  */
-export function pairOf(name: string | Pair): Pair {
+export function pairOf(name: string | Pair): Pair;
+export function pairOf(name: string | Pair<string>): Pair<string>;
+export function pairOf(name: string | Pair<string>): Pair<string> {
   if (typeof name !== "string") return name;
   known ??= makePairs();
   const pair = known.get(name);

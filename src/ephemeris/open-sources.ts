@@ -1,4 +1,5 @@
 import { type Pair, type PairName, pairOf } from "../bodies/pair.ts";
+import type { TrackPair } from "../bodies/track-pair.ts";
 import { ApsidaryError } from "../error.ts";
 import { builtInLeapSeconds, type LeapSecondList, parseLeapSeconds } from "../time/leap-seconds.ts";
 import { openBuiltInKernel, openBuiltInSeries } from "./builtin.ts";
@@ -46,7 +47,7 @@ export interface Ephemeris {
   readonly sources: readonly Source[];
   readonly leapSeconds: LeapSecondList;
   /** Gives the stretches of TDB seconds past J2000 in which each source supplies a pair, the best source first. */
-  covers(pair: PairName | Pair): readonly Coverage[];
+  covers(pair: PairName | Pair | TrackPair): readonly Coverage[];
   /** Tells what each source holds. */
   describe(): string;
 }
@@ -83,7 +84,7 @@ export async function openSources(options: SourceOptions = {}): Promise<Ephemeri
   return Object.freeze({
     sources,
     leapSeconds,
-    covers(pair: PairName | Pair) {
+    covers(pair: PairName | Pair | TrackPair) {
       const known = pairOf(pair);
       return sources.flatMap((source) => source.spans(known).map(({ from, to }) => ({ from, to, source: source.id })));
     },

@@ -18,6 +18,13 @@ export interface Accuracy {
   /** Of the range rate, km/s. */
   readonly rangeRateKmS: number;
   readonly basis: AccuracyBasis;
+  /**
+   * Of the instant of a passage at that time, seconds, where the source knows it directly: a period and an epoch with
+   * their errors, say. Left out, it follows from the range rate's.
+   */
+  readonly timeSeconds?: number;
+  /** Whether the error could undo that passage; goes with `timeSeconds`. */
+  readonly existence?: "certain" | "uncertain";
 }
 
 /**
@@ -45,11 +52,11 @@ export interface Source {
   /** One line for people. */
   readonly title: string;
   /** Stretches of time for which the pair's states are supplied, in order, not overlapping; empty where never. */
-  spans(pair: Pair): readonly Span[];
+  spans(pair: Pair<string>): readonly Span[];
   /** Gives the pair's motion. @throws ApsidaryError `not-supplied` where `spans(pair)` is empty */
-  motion(pair: Pair): Motion;
+  motion(pair: Pair<string>): Motion;
   /** Gives the accuracy that the source admits for the pair at a time. */
-  accuracy(pair: Pair, tdb: number): Accuracy;
+  accuracy(pair: Pair<string>, tdb: number): Accuracy;
   /** Hexadecimal SHA-256 of the data, `null` for a source without data of its own. */
   checksum(): Promise<string | null>;
   /** Tells in several lines what the source holds. */

@@ -1,6 +1,7 @@
 import type { Pair, PairName } from "../bodies/pair.ts";
+import type { TrackPair } from "../bodies/track-pair.ts";
 import type { Ephemeris } from "../ephemeris/open-sources.ts";
-import type { Passage } from "./passage.ts";
+import type { Passage, TrackPassage } from "./passage.ts";
 import { type PassageQuery, passages } from "./passages.ts";
 
 /**
@@ -15,16 +16,28 @@ export function mergedPassages(
   ephemeris: Ephemeris,
   pairs: Iterable<PairName | Pair>,
   query: PassageQuery,
-): Generator<Passage, void, undefined> {
+): Generator<Passage, void, undefined>;
+export function mergedPassages(
+  ephemeris: Ephemeris,
+  pairs: Iterable<PairName | Pair | TrackPair>,
+  query: PassageQuery,
+): Generator<Passage | TrackPassage, void, undefined>;
+export function mergedPassages(
+  ephemeris: Ephemeris,
+  pairs: Iterable<PairName | Pair | TrackPair>,
+  query: PassageQuery,
+): Generator<Passage | TrackPassage, void, undefined> {
   return merge([...new Set(pairs)].map((pair) => passages(ephemeris, pair, query)));
 }
 
-function* merge(streams: Generator<Passage, void, undefined>[]): Generator<Passage, void, undefined> {
+function* merge(
+  streams: Generator<Passage | TrackPassage, void, undefined>[],
+): Generator<Passage | TrackPassage, void, undefined> {
   const heads = streams.map((stream) => stream.next().value);
   for (;;) {
     let first = -1;
     heads.forEach((head, i) => {
-      if (head && (first < 0 || head.tdbSeconds < (heads[first] as Passage).tdbSeconds)) first = i;
+      if (head && (first < 0 || head.tdbSeconds < (heads[first] as Passage | TrackPassage).tdbSeconds)) first = i;
     });
     const head = heads[first];
     if (!head) return;

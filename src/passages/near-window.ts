@@ -2,7 +2,7 @@ import { pairOf } from "../bodies/pair.ts";
 import type { Ephemeris } from "../ephemeris/open-sources.ts";
 import { ApsidaryError } from "../error.ts";
 import { brentZero } from "../numeric/brent-zero.ts";
-import type { Passage } from "./passage.ts";
+import { isTrackPassage, type Passage, type TrackPassage } from "./passage.ts";
 import { timelineFor } from "./timeline-for.ts";
 
 /** How far the distance may be from its extreme. */
@@ -33,7 +33,7 @@ const TOLERANCE_SECONDS = 0.01;
  * @param nearness  kilometres, or percent of the extreme distance; above zero
  * @throws ApsidaryError `bad-option`
  */
-export function nearWindow(ephemeris: Ephemeris, passage: Passage, nearness: Nearness): NearWindow {
+export function nearWindow(ephemeris: Ephemeris, passage: Passage | TrackPassage, nearness: Nearness): NearWindow {
   const km = "km" in nearness ? nearness.km : (passage.distanceKm * nearness.percent) / 100;
   if (!(km > 0) || !Number.isFinite(km)) {
     throw new ApsidaryError(
@@ -43,7 +43,7 @@ export function nearWindow(ephemeris: Ephemeris, passage: Passage, nearness: Nea
   }
   const outward = passage.kind === "periapsis" ? 1 : -1;
   const limitKm = passage.distanceKm + outward * km;
-  const pair = pairOf(passage.pair);
+  const pair = isTrackPassage(passage) ? passage.track : pairOf(passage.pair);
   const timeline = timelineFor(ephemeris, pair, "auto");
   const supplyOf = (tdb: number) => {
     const own = timeline.supplyAt(tdb);

@@ -1,11 +1,12 @@
 import { DAY_SECONDS } from "../bodies/constants.ts";
 import { type Pair, type PairName, pairOf } from "../bodies/pair.ts";
 import type { ApsisKind, ApsisRank } from "../bodies/term.ts";
+import { isTrackPair, type TrackPair } from "../bodies/track-pair.ts";
 import type { Ephemeris } from "../ephemeris/open-sources.ts";
 import { ApsidaryError } from "../error.ts";
 import { formatTdb } from "../time/format-tdb.ts";
 import { type Moment, tdbOf } from "../time/tdb-of.ts";
-import type { Passage } from "./passage.ts";
+import type { Passage, TrackPassage } from "./passage.ts";
 import { timeUncertainty } from "./time-uncertainty.ts";
 import type { SuppliedExtremum, Timeline } from "./timeline.ts";
 import { type SourceChoice, timelineFor } from "./timeline-for.ts";
@@ -28,7 +29,7 @@ export interface PassageQuery {
  * The list does not depend on how a span is cut: joined, the lists of its parts are the list of the whole, to the bit.
  *
  * @param ephemeris what `openSources` gave
- * @param pair      a pair's name, such as `moon-earth`
+ * @param pair      a pair's name, such as `moon-earth`, or the pair that a track brought
  * @param query     the span, and what to leave out
  * @throws ApsidaryError at the call: `bad-pair`, `bad-date`, `bad-span` (from ≥ to), `not-supplied` (no source has the pair), `not-covered`
  *   (the span is not wholly inside the sources)
@@ -41,7 +42,22 @@ export function passages(
   ephemeris: Ephemeris,
   pair: PairName | Pair,
   query: PassageQuery,
-): Generator<Passage, void, undefined> {
+): Generator<Passage, void, undefined>;
+export function passages(
+  ephemeris: Ephemeris,
+  pair: TrackPair,
+  query: PassageQuery,
+): Generator<TrackPassage, void, undefined>;
+export function passages(
+  ephemeris: Ephemeris,
+  pair: PairName | Pair | TrackPair,
+  query: PassageQuery,
+): Generator<Passage | TrackPassage, void, undefined>;
+export function passages(
+  ephemeris: Ephemeris,
+  pair: PairName | Pair | TrackPair,
+  query: PassageQuery,
+): Generator<Passage | TrackPassage, void, undefined> {
   const from = tdbOf(query.from, ephemeris.leapSeconds);
   const to = tdbOf(query.to, ephemeris.leapSeconds);
   if (!(from < to)) {
@@ -53,7 +69,7 @@ export function passages(
   const timeline = timelineFor(ephemeris, pairOf(pair), query.source ?? "auto");
   requireCovered(timeline, from, to);
   const kind = query.kind ?? "both";
-  const keeps = (passage: Passage) =>
+  const keeps = (passage: Passage<string>) =>
     (kind === "both" || passage.kind === kind) && (query.rank !== "principal" || passage.rank !== "secondary");
   return passagesBetween(timeline, from, to, keeps);
 }
@@ -73,8 +89,8 @@ function* passagesBetween(
   timeline: Timeline,
   from: number,
   to: number,
-  keeps: (passage: Passage) => boolean,
-): Generator<Passage, void, undefined> {
+  keeps: (passage: Passage<string>) => boolean,
+): Generator<Passage | TrackPassage, void, undefined> {
   const { halfPeriodSeconds: reach } = timeline.pair;
   const covered = timeline.covered.find((span) => span.from <= from && from < span.to);
   if (!covered) return;
@@ -130,19 +146,26 @@ function rankIn(
   return it.tdb - reach < covered.from || it.tdb + reach > covered.to ? null : "principal";
 }
 
-function passageOf(pair: Pair, { kind, tdb, supply, distance, acceleration }: Ranked, rank: ApsisRank): Passage {
+function passageOf(
+  pair: Pair<string>,
+  { kind, tdb, supply, distance, acceleration }: Ranked,
+  rank: ApsisRank,
+): Passage | TrackPassage {
   const { source, range, span } = supply;
   const accuracy = source.accuracy(pair, tdb);
-  const time = timeUncertainty(
-    range,
-    span,
-    tdb,
-    acceleration,
-    accuracy.rangeRateKmS,
-    pair.sampleSeconds,
-    pair.halfPeriodSeconds,
-  );
-  return Object.freeze({
+  const time =
+    accuracy.timeSeconds === undefined
+      ? timeUncertainty(
+          range,
+          span,
+          tdb,
+          acceleration,
+          accuracy.rangeRateKmS,
+          pair.sampleSeconds,
+          pair.halfPeriodSeconds,
+        )
+      : { seconds: accuracy.timeSeconds, existence: accuracy.existence ?? "certain" };
+  const passage = {
     pair: pair.name,
     kind,
     rank,
@@ -154,5 +177,7 @@ function passageOf(pair: Pair, { kind, tdb, supply, distance, acceleration }: Ra
     rangeAccelerationKmPerDay2: acceleration * DAY_SECONDS * DAY_SECONDS,
     source: source.id,
     accuracyBasis: accuracy.basis,
-  });
+  };
+  // a pair that is not a track's is one of those known by name
+  return isTrackPair(pair) ? Object.freeze({ ...passage, track: pair }) : Object.freeze(passage as Passage);
 }

@@ -1,5 +1,6 @@
 import { DAY_SECONDS } from "../bodies/constants.ts";
 import { type Pair, type PairName, pairOf } from "../bodies/pair.ts";
+import type { TrackPair } from "../bodies/track-pair.ts";
 import type { Ephemeris } from "../ephemeris/open-sources.ts";
 import { ApsidaryError } from "../error.ts";
 import { formatTdb } from "../time/format-tdb.ts";
@@ -31,7 +32,7 @@ const RATE_STEP = 60;
  */
 export function rangeAt(
   ephemeris: Ephemeris,
-  pair: PairName | Pair,
+  pair: PairName | Pair | TrackPair,
   moment: Moment,
   source: SourceChoice = "auto",
 ): Range {

@@ -1,10 +1,11 @@
 import { type Pair, type PairName, pairOf } from "../bodies/pair.ts";
+import type { TrackPair } from "../bodies/track-pair.ts";
 import type { Ephemeris } from "../ephemeris/open-sources.ts";
 import { ApsidaryError } from "../error.ts";
 import { tdbMinusTt } from "../time/tdb-minus-tt.ts";
 import { type Moment, tdbOf } from "../time/tdb-of.ts";
 import { previousPassage } from "./next-passage.ts";
-import type { Passage } from "./passage.ts";
+import type { Passage, TrackPassage } from "./passage.ts";
 import { passages } from "./passages.ts";
 import { type Range, rangeAt } from "./range-at.ts";
 import { type SourceChoice, timelineFor } from "./timeline-for.ts";
@@ -36,14 +37,14 @@ export interface TrackQuery {
  */
 export function rangeTrack(
   ephemeris: Ephemeris,
-  pair: PairName | Pair,
+  pair: PairName | Pair | TrackPair,
   query: TrackQuery,
 ): Generator<TrackedRange, void, undefined> {
   const { stepSeconds, source = "auto" } = query;
   if (!(stepSeconds > 0) || !Number.isFinite(stepSeconds)) {
     throw new ApsidaryError("bad-option", `the step must be above zero seconds, not ${stepSeconds}.`);
   }
-  const known = pairOf(pair);
+  const known = typeof pair === "string" ? pairOf(pair) : pair;
   const from = tdbOf(query.from, ephemeris.leapSeconds);
   const to = tdbOf(query.to, ephemeris.leapSeconds);
   passages(ephemeris, known, { ...query, source }); // refuses what cannot be answered, at the call
@@ -55,7 +56,7 @@ const RESOLUTION = 1e-6;
 
 function* track(
   ephemeris: Ephemeris,
-  pair: Pair,
+  pair: Pair | TrackPair,
   from: number,
   to: number,
   step: number,
@@ -64,7 +65,7 @@ function* track(
   const end = timelineFor(ephemeris, pair, source).covered.find((span) => span.from <= from && to <= span.to)?.to ?? to;
   let before = previousPassage(ephemeris, pair, { tdbSeconds: from }, "both", { source });
   const later = passages(ephemeris, pair, { from: { tdbSeconds: from }, to: { tdbSeconds: end }, source });
-  let after: Passage | null = later.next().value ?? null;
+  let after: Passage | TrackPassage | null = later.next().value ?? null;
   // Steps are equal on clocks, that is in TT, from which TDB swings by 2 ms in a year.
   const start = from - tdbMinusTt(from);
   for (let i = 0; ; i++) {
@@ -80,7 +81,7 @@ function* track(
   }
 }
 
-function shareOf(km: number, before: Passage | null, after: Passage | null): number | null {
+function shareOf(km: number, before: Passage<string> | null, after: Passage<string> | null): number | null {
   if (!before || !after || before.kind === after.kind) return null;
   const least = Math.min(before.distanceKm, after.distanceKm);
   return (km - least) / (Math.max(before.distanceKm, after.distanceKm) - least);

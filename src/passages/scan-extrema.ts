@@ -33,12 +33,21 @@ const TURN_TOLERANCE = 1;
  * @param span  where it may be evaluated
  * @param step  seconds from sample to sample, well under a quarter of the shortest interval between extrema
  * @param from  where to begin: no extremum at or after it is missed; earlier ones may come first
+ * @param tolerance half the width of the last bracket, seconds; left out, one that suits the planets and the Moon
  * @returns a function that gives the next extremum, `null` after the last one in the span
  *
  * Method: R. P. Brent, *Algorithms for Minimization without Derivatives* (1973).
  */
-export function scanExtrema(range: RangeFunction, span: Span, step: number, from: number): () => Extremum | null {
-  return range.givesRate ? scanByRate(range, span, step, from) : scanByDistance(range, span, step, from);
+export function scanExtrema(
+  range: RangeFunction,
+  span: Span,
+  step: number,
+  from: number,
+  tolerance?: number,
+): () => Extremum | null {
+  return range.givesRate
+    ? scanByRate(range, span, step, from, tolerance ?? ZERO_TOLERANCE)
+    : scanByDistance(range, span, step, from, tolerance ?? MINIMUM_TOLERANCE);
 }
 
 /** The samples of a grid inside a span, its two ends included; the first lies up to two steps before `from`, or at the span's start. */
@@ -60,7 +69,13 @@ function samplesOf(span: Span, step: number, from: number) {
   };
 }
 
-function scanByRate(range: RangeFunction, span: Span, step: number, from: number): () => Extremum | null {
+function scanByRate(
+  range: RangeFunction,
+  span: Span,
+  step: number,
+  from: number,
+  tolerance: number,
+): () => Extremum | null {
   const { rate } = range;
   const samples = samplesOf(span, step, from);
   // Three samples in a row: a, b, c. Before the span's start the rate counts as infinite, so that a turn at the edge is seen.
@@ -72,7 +87,7 @@ function scanByRate(range: RangeFunction, span: Span, step: number, from: number
   let ended = false;
   const refine = (x: number, fx: number, y: number, fy: number): Extremum => ({
     kind: fx < 0 ? "periapsis" : "apoapsis",
-    tdb: brentZero(rate, x, fx, y, fy, ZERO_TOLERANCE),
+    tdb: brentZero(rate, x, fx, y, fy, tolerance),
   });
   return () => {
     if (pending) {
@@ -105,7 +120,7 @@ function scanByRate(range: RangeFunction, span: Span, step: number, from: number
       fb = fc;
       if (turnsAtB) {
         const sign = fx < 0 ? -1 : 1;
-        const turn = brentMinimum((t) => sign * rate(t), start, c, TURN_TOLERANCE);
+        const turn = brentMinimum((t) => sign * rate(t), start, c, Math.min(TURN_TOLERANCE, tolerance));
         const fturn = rate(turn);
         if (fturn < 0 !== fx < 0) {
           const before = turn > x ? x : start;
@@ -121,7 +136,13 @@ function scanByRate(range: RangeFunction, span: Span, step: number, from: number
   };
 }
 
-function scanByDistance(range: RangeFunction, span: Span, step: number, from: number): () => Extremum | null {
+function scanByDistance(
+  range: RangeFunction,
+  span: Span,
+  step: number,
+  from: number,
+  tolerance: number,
+): () => Extremum | null {
   const { distance } = range;
   const samples = samplesOf(span, step, from);
   let a = samples.first;
@@ -142,7 +163,7 @@ function scanByDistance(range: RangeFunction, span: Span, step: number, from: nu
       const sign = low ? 1 : -1;
       return {
         kind: low ? "periapsis" : "apoapsis",
-        tdb: brentMinimum((t) => sign * distance(t), start, c, MINIMUM_TOLERANCE),
+        tdb: brentMinimum((t) => sign * distance(t), start, c, tolerance),
       };
     }
     return null;

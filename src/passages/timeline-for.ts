@@ -11,7 +11,7 @@ export type SourceChoice = "auto" | "kernel" | "series" | "engine";
  *
  * @throws ApsidaryError `not-supplied`
  */
-export function timelineFor(ephemeris: Ephemeris, pair: Pair, choice: SourceChoice): Timeline {
+export function timelineFor(ephemeris: Ephemeris, pair: Pair<string>, choice: SourceChoice): Timeline {
   let known = timelines.get(ephemeris);
   if (!known) {
     known = new Map();

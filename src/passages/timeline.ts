@@ -32,7 +32,7 @@ interface Kept {
 
 /** The sources of a pair laid along time, the best one at each moment. */
 export interface Timeline {
-  readonly pair: Pair;
+  readonly pair: Pair<string>;
   /** Stretches without a gap, in order. */
   readonly covered: readonly Span[];
   /** All supplies, the best first. */
@@ -60,7 +60,7 @@ export interface Timeline {
  * @param sources the sources, the best first
  * @throws ApsidaryError `not-supplied` where none supplies the pair
  */
-export function timelineOf(pair: Pair, sources: readonly Source[]): Timeline {
+export function timelineOf(pair: Pair<string>, sources: readonly Source[]): Timeline {
   const all = sources.flatMap((source) =>
     source.spans(pair).map((span): Supply => {
       const range = rangeFunction(source.motion(pair), `${source.title}, ${pair.name},`);
@@ -107,7 +107,13 @@ export function timelineOf(pair: Pair, sources: readonly Source[]): Timeline {
           const { supply } = pieces[index] as Piece;
           const keep = keptOf(index);
           if (keep.until > from) {
-            scan ??= scanExtrema(supply.range, supply.span, pair.sampleSeconds, Math.max(from, keep.from));
+            scan ??= scanExtrema(
+              supply.range,
+              supply.span,
+              pair.sampleSeconds,
+              Math.max(from, keep.from),
+              pair.toleranceSeconds,
+            );
             for (let found = scan(); found && found.tdb < keep.until; found = scan()) {
               if (found.tdb >= keep.from) return { kind: found.kind, tdb: found.tdb, supply };
             }
@@ -155,7 +161,7 @@ function coveredBy(pieces: readonly Piece[]): Span[] {
  * Tells how the lists of two neighbouring pieces join: the left one gives its extrema before `leftUntil`, the right one
  * those from `rightFrom` on.
  */
-function seam(pair: Pair, pieces: readonly Piece[], index: number): { leftUntil: number; rightFrom: number } {
+function seam(pair: Pair<string>, pieces: readonly Piece[], index: number): { leftUntil: number; rightFrom: number } {
   const left = pieces[index];
   const right = pieces[index + 1];
   if (!left || !right || left.to !== right.from) return { leftUntil: Infinity, rightFrom: -Infinity };
@@ -183,7 +189,7 @@ function seam(pair: Pair, pieces: readonly Piece[], index: number): { leftUntil:
  * One that lies deeper in the better source's span without a twin there is the lesser source's own invention, as a slow planet's series
  * makes two extrema where there is none.
  */
-function reachOf(supply: Supply, pair: Pair, { tdb }: Extremum): number {
+function reachOf(supply: Supply, pair: Pair<string>, { tdb }: Extremum): number {
   const measures = new Float64Array(2);
   supply.range.measure(tdb, measures);
   return (3 * supply.source.accuracy(pair, tdb).rangeRateKmS) / Math.abs(measures[1] as number);
@@ -192,22 +198,28 @@ function reachOf(supply: Supply, pair: Pair, { tdb }: Extremum): number {
 /** Seconds by which an instant is passed to leave it out; numbers of this size resolve 10⁻⁶ s. */
 const RESOLUTION = 1e-5;
 
-function holdsExtremum(supply: Supply, pair: Pair): boolean {
-  return scanExtrema(supply.range, supply.span, pair.sampleSeconds, supply.span.from)() !== null;
+function holdsExtremum(supply: Supply, pair: Pair<string>): boolean {
+  return scanExtrema(supply.range, supply.span, pair.sampleSeconds, supply.span.from, pair.toleranceSeconds)() !== null;
 }
 
 function reachesPast(other: Supply, supply: Supply): boolean {
   return other !== supply && other.span.from <= supply.span.from && other.span.to >= supply.span.to;
 }
 
-function firstIn(piece: Piece, pair: Pair): Extremum | null {
-  const next = scanExtrema(piece.supply.range, piece.supply.span, pair.sampleSeconds, piece.from);
+function firstIn(piece: Piece, pair: Pair<string>): Extremum | null {
+  const next = scanExtrema(
+    piece.supply.range,
+    piece.supply.span,
+    pair.sampleSeconds,
+    piece.from,
+    pair.toleranceSeconds,
+  );
   for (let found = next(); found && found.tdb <= piece.to; found = next()) if (found.tdb >= piece.from) return found;
   return null;
 }
 
 /** Searches in growing stretches before the piece's end, so that a long piece is not scanned whole for its last extremum. */
-function lastIn(piece: Piece, pair: Pair): Extremum | null {
+function lastIn(piece: Piece, pair: Pair<string>): Extremum | null {
   for (let reach = pair.halfPeriodSeconds; ; reach *= 2) {
     const from = Math.max(piece.from, piece.to - reach);
     const last = extremaIn(piece.supply, pair, from, piece.to).at(-1);
@@ -216,15 +228,15 @@ function lastIn(piece: Piece, pair: Pair): Extremum | null {
 }
 
 /** A supply's extrema with `from ≤ t < to`. */
-function extremaIn(supply: Supply, pair: Pair, from: number, to: number): Extremum[] {
-  const next = scanExtrema(supply.range, supply.span, pair.sampleSeconds, from);
+function extremaIn(supply: Supply, pair: Pair<string>, from: number, to: number): Extremum[] {
+  const next = scanExtrema(supply.range, supply.span, pair.sampleSeconds, from, pair.toleranceSeconds);
   const list: Extremum[] = [];
   for (let found = next(); found && found.tdb < to; found = next()) if (found.tdb >= from) list.push(found);
   return list;
 }
 
 /** The instant of a supply's extremum of the same kind nearest to another source's, within half a period; `null` where there is none. */
-function nearestOfKind(supply: Supply, pair: Pair, twin: Extremum): number | null {
+function nearestOfKind(supply: Supply, pair: Pair<string>, twin: Extremum): number | null {
   const reach = pair.halfPeriodSeconds;
   let nearest: number | null = null;
   for (const { kind, tdb } of extremaIn(supply, pair, twin.tdb - reach, twin.tdb + reach)) {

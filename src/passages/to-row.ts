@@ -1,13 +1,14 @@
 import { AU_KM } from "../bodies/constants.ts";
-import { type PairName, pairOf } from "../bodies/pair.ts";
+import { type Pair, type PairName, pairOf } from "../bodies/pair.ts";
 import { type ApsisKind, type ApsisRank, termOf } from "../bodies/term.ts";
+import { UNNAMED_POINT } from "../bodies/track-pair.ts";
 import type { AccuracyBasis } from "../ephemeris/source.ts";
 import { rounded } from "../report/rounded.ts";
 import { formatTdb } from "../time/format-tdb.ts";
 import { formatUtc } from "../time/format-utc.ts";
 import type { LeapSecondList } from "../time/leap-seconds.ts";
 import { type UtcBasis, utcOf } from "../time/utc-of.ts";
-import type { Passage } from "./passage.ts";
+import { isTrackPassage, type Passage, type TrackPassage } from "./passage.ts";
 
 /** A passage as it is given out: with its words, its civil time and both units of distance. Numbers are rounded to 1 ms, 1 m, 1e-12 au. */
 export interface PassageRow {
@@ -37,17 +38,47 @@ export interface PassageRow {
   readonly accuracyBasis: AccuracyBasis;
 }
 
+/** The row of a track's passage: the name is the caller's, and the height stands beside the distance. */
+export interface TrackRow extends Omit<PassageRow, "pair" | "targetPoint"> {
+  readonly pair: string;
+  /** `null` where the moving point has no SPK id. */
+  readonly targetPoint: number | null;
+  /** Distance less the reference radius; `null` where none is known. */
+  readonly heightKm: number | null;
+}
+
 /**
  * Gives the row of a passage.
  *
  * @param passage the passage
  * @param scales  the leap-second list by which UTC is told: an `Ephemeris` will do; left out, the built-in list
  */
-export function toRow(passage: Passage, scales?: { readonly leapSeconds: LeapSecondList }): PassageRow {
-  const pair = pairOf(passage.pair);
+export function toRow(passage: Passage, scales?: Scales): PassageRow;
+export function toRow(passage: TrackPassage, scales?: Scales): TrackRow;
+export function toRow(passage: Passage | TrackPassage, scales?: Scales): PassageRow | TrackRow;
+export function toRow(passage: Passage | TrackPassage, scales?: Scales): PassageRow | TrackRow {
+  if (!isTrackPassage(passage)) return Object.freeze(rowOf(passage, pairOf(passage.pair), scales));
+  const { target, referenceRadiusKm } = passage.track;
+  return Object.freeze({
+    ...rowOf(passage, passage.track, scales),
+    targetPoint: target === UNNAMED_POINT ? null : target,
+    heightKm: referenceRadiusKm === null ? null : rounded(passage.distanceKm - referenceRadiusKm, 3),
+  });
+}
+
+/** The leap-second list by which UTC is told. */
+interface Scales {
+  readonly leapSeconds: LeapSecondList;
+}
+
+function rowOf<Name extends string>(
+  passage: Passage<Name>,
+  pair: Pair<Name>,
+  scales: Scales | undefined,
+): Omit<PassageRow, "pair"> & { readonly pair: Name } {
   const { kind, rank, tdbSeconds, distanceKm } = passage;
   const utc = utcOf(tdbSeconds, scales?.leapSeconds);
-  return Object.freeze({
+  return {
     pair: pair.name,
     targetPoint: pair.target,
     centrePoint: pair.centre,
@@ -67,7 +98,7 @@ export function toRow(passage: Passage, scales?: { readonly leapSeconds: LeapSec
     rangeAccelerationKmPerDay2: rounded(passage.rangeAccelerationKmPerDay2, 6),
     source: passage.source,
     accuracyBasis: passage.accuracyBasis,
-  });
+  };
 }
 
 /** A half-width is never rounded to less than it is. */
