@@ -79,7 +79,7 @@ function* bodyOf(
     if (manyYears && block.year !== year) yield `${chartElement("h2", {}, escaped(block.year))}\n`;
     year = block.year;
     count++;
-    yield* sectionOf(ephemeris, block, page, manyYears ? "h3" : "h2");
+    yield* sectionOf(ephemeris, block, page, manyYears);
   }
   if (count === 0) yield "<p>No passage in this span.</p>\n";
   yield "</main>\n<footer>\n";
@@ -91,14 +91,17 @@ function* sectionOf(
   ephemeris: Ephemeris,
   block: YearBlock,
   page: CalendarPage,
-  heading: "h2" | "h3",
+  manyYears: boolean,
 ): Generator<string, void, undefined> {
   const id = `${block.pair}-${block.year}`;
   const words = pairWords(block.pair);
   yield `${chartElement("section", { "aria-labelledby": id }, "\n", ...pieces())}\n`;
 
   function* pieces() {
-    yield `${chartElement(heading, { id }, escaped(words))}\n`;
+    const heading = manyYears
+      ? chartElement("h3", { id }, escaped(`${words}, ${block.year}`))
+      : chartElement("h2", { id }, escaped(words));
+    yield `${heading}\n`;
     yield figureOf(ephemeris, block, page, id);
     const caption = `${words}: passages of ${block.year}, local time of ${page.zone}`;
     yield htmlTable(`${id}-table`, caption, columnsOf(block, page.style), block.rows);
