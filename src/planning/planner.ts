@@ -20,9 +20,9 @@ import type { PlanRow, WhyNoRise, WhyNoTransit, WhyNot } from "./plan-row.ts";
 import { commonStretches, type Stretch, stretchesAbove } from "./stretches.ts";
 
 /** Seconds from sample to sample of an altitude; its period is a day. */
-const STEP = 3600;
-/** Seconds to which rise, set and the ends of windows are found. */
-const TOLERANCE = 0.01;
+const STEP = 7200;
+/** Seconds to which rise, set and the ends of windows are bracketed; the chord over the bracket leaves 10⁻⁵ s where nothing grazes. */
+const TOLERANCE = 0.5;
 /** A body that rises and sets does so once in this many seconds; the Moon's day is up to 24 h 59 min where it is not grazing. */
 const MOON_DAY = 91_000;
 /** Seconds to either side of a passage within which the site's own extreme lies: the turning Earth moves it by half a day and little more. */
@@ -71,9 +71,13 @@ export function planner(
     horizon.look(tdb, place, looked);
     return looked;
   };
+  const height = (where: Place, tdb: number): number => {
+    where(tdb, place);
+    return horizon.altitude(tdb, place);
+  };
   const lifted = (altitude: number) => (refraction ? altitude + horizon.refraction(altitude) : altitude);
-  const altitude = (tdb: number) => lifted(look(body.apparentNearby, tdb)[LOOK.altitude] as number);
-  const sunAltitude = (tdb: number) => look(sun.apparentNearby, tdb)[LOOK.altitude] as number;
+  const altitude = (tdb: number) => lifted(height(body.apparentNearby, tdb));
+  const sunAltitude = (tdb: number) => height(sun.apparentNearby, tdb);
   const distance = (tdb: number) => look(body.geometric, tdb)[LOOK.distance] as number;
 
   const utc = (tdb: number | null) => (tdb === null ? null : utcText(tdb, 3, leapSeconds));
@@ -117,7 +121,7 @@ export function planner(
     const topocentricKm = distance(t);
 
     const stays = aboveZero(around(MOON_DAY));
-    const { riseUtc, transitUtc, setUtc, whyNoRise, whyNoTransit } = visit(t, stays, around(MOON_DAY));
+    const { riseUtc, transitUtc, setUtc, whyNoRise, whyNoTransit } = visit(t, stays, around(MOON_DAY), covered);
 
     const day = around(DAY_SECONDS);
     const upInDay = minAltitudeDeg === 0 ? commonStretches(stays, [day]) : aboveLeast(day);
@@ -175,7 +179,7 @@ export function planner(
   };
 
   /** Rise, transit and set of the stay above the horizon that holds an instant, or is nearest to it. */
-  function visit(t: number, stays: readonly Stretch[], span: Span) {
+  function visit(t: number, stays: readonly Stretch[], span: Span, covered: Span) {
     let stay: Stretch | null = null;
     for (const it of stays) if (stay === null || gap(it, t) < gap(stay, t)) stay = it;
     const full = span.to - span.from >= 2 * MOON_DAY - 1;
@@ -183,13 +187,27 @@ export function planner(
       const why = full ? ("stays-down" as const) : ("no-data" as const);
       return { riseUtc: null, transitUtc: null, setUtc: null, whyNoRise: why, whyNoTransit: why };
     }
-    const rise = stay.from > span.from ? stay.from : null;
-    const set = stay.to < span.to ? stay.to : null;
-    const transit = atPole ? null : transitNear(rise !== null && set !== null ? (rise + set) / 2 : t, span);
+    const rise = stay.from > span.from ? stay.from : beginBefore(span.from, covered);
+    const set = stay.to < span.to ? stay.to : endAfter(span.to, covered);
+    const transit = atPole ? null : transitNear(rise !== null && set !== null ? (rise + set) / 2 : t, covered);
     const whyNoRise: WhyNoRise | null =
       rise !== null && set !== null ? null : full || stay.to - stay.from > MOON_DAY ? "stays-up" : "no-data";
     const whyNoTransit: WhyNoTransit | null = transit !== null ? null : atPole ? "pole" : "no-data";
     return { riseUtc: utc(rise), transitUtc: utc(transit), setUtc: utc(set), whyNoRise, whyNoTransit };
+  }
+
+  /** Where a stay that lasts at an instant began, `null` where that is more than a day before. */
+  function beginBefore(at: number, covered: Span): number | null {
+    const from = Math.max(at - MOON_DAY, covered.from);
+    const last = aboveZero({ from, to: at }).at(-1);
+    return last && last.to === at && last.from > from ? last.from : null;
+  }
+
+  /** Where a stay that lasts at an instant ends, `null` where that is more than a day after. */
+  function endAfter(at: number, covered: Span): number | null {
+    const to = Math.min(at + MOON_DAY, covered.to);
+    const [first] = aboveZero({ from: at, to });
+    return first && first.from === at && first.to < to ? first.to : null;
   }
 
   /** The upper passage of the meridian nearest to an instant; each round leaves a thirtieth of the error, for the Moon. */

@@ -17,6 +17,8 @@ export interface Horizon {
    * @param out   four places, in the order of `LOOK`
    */
   look(tdb: number, place: Float64Array, out: Float64Array): void;
+  /** Gives the altitude alone, as `look` does. */
+  altitude(tdb: number, place: Float64Array): number;
   /** Writes the site's own place from the Earth's centre, ICRF, km, to `out[0 … 2]`. */
   place(tdb: number, out: Float64Array): void;
   /** Gives by how much the air lifts a body, degrees. */
@@ -47,7 +49,9 @@ export function horizonOf(library: EngineLibrary, turn: EarthTurn, site: Site): 
     site: Object.freeze({ ...site }),
     look(tdb: number, body: Float64Array, out: Float64Array): void {
       turn.matrix(tdb, m);
-      const [x, y, z] = [body[0] as number, body[1] as number, body[2] as number];
+      const x = body[0] as number;
+      const y = body[1] as number;
+      const z = body[2] as number;
       const dx = (m[0] as number) * x + (m[1] as number) * y + (m[2] as number) * z - place[0];
       const dy = (m[3] as number) * x + (m[4] as number) * y + (m[5] as number) * z - place[1];
       const dz = (m[6] as number) * x + (m[7] as number) * y + (m[8] as number) * z - place[2];
@@ -59,6 +63,17 @@ export function horizonOf(library: EngineLibrary, turn: EarthTurn, site: Site): 
       out[LOOK.azimuth] = azimuth < 0 ? azimuth + 360 : azimuth;
       out[LOOK.distance] = Math.sqrt(dx * dx + dy * dy + dz * dz);
       out[LOOK.hourAngle] = Math.atan2(-e, dx * outX + dy * outY) * degrees;
+    },
+    altitude(tdb: number, body: Float64Array): number {
+      turn.matrix(tdb, m);
+      const x = body[0] as number;
+      const y = body[1] as number;
+      const z = body[2] as number;
+      const dx = (m[0] as number) * x + (m[1] as number) * y + (m[2] as number) * z - place[0];
+      const dy = (m[3] as number) * x + (m[4] as number) * y + (m[5] as number) * z - place[1];
+      const dz = (m[6] as number) * x + (m[7] as number) * y + (m[8] as number) * z - place[2];
+      const u = dx * up[0] + dy * up[1] + dz * up[2];
+      return Math.atan2(u, Math.sqrt(Math.max(dx * dx + dy * dy + dz * dz - u * u, 0))) * degrees;
     },
     place(tdb: number, out: Float64Array): void {
       turn.matrix(tdb, m);

@@ -77,7 +77,7 @@ describe("a body over a site", () => {
         horizon.look(t, place, seen);
         return seen[LOOK.altitude] as number;
       };
-      const ends = stretchesAbove(altitude, tdb - 7000, tdb + 7100, 3600, 0.01).map((up) =>
+      const ends = stretchesAbove(altitude, tdb - 7000, tdb + 7100, 7200, 0.5).map((up) =>
         what === "rise" ? up.from : up.to,
       );
       worst = Math.max(worst, Math.min(...ends.map((end) => Math.abs(end - tdb))));

@@ -107,6 +107,27 @@ test("a Moon that stays down for days has no rise and no window", () => {
   }
 });
 
+test("rise, transit and set are of one stay, in this order, which holds the passage where the body is up", () => {
+  let [whole, high] = [0, 0];
+  for (const latitude of [-64, -50, 0, 35, 58, 62, 64, 65.5]) {
+    for (const { riseUtc, transitUtc, setUtc, whyNoRise, utc, altitudeDeg } of plan(
+      "moon-earth",
+      [latitude, 40, 0],
+      "2025",
+      "2027",
+    )) {
+      expect(whyNoRise === null).toBe(riseUtc !== null && setUtc !== null);
+      if (riseUtc === null || setUtc === null || transitUtc === null) continue;
+      whole++;
+      expect(riseUtc < transitUtc && transitUtc < setUtc).toBe(true);
+      if (Math.abs(altitudeDeg) > 0.001) expect(altitudeDeg > 0).toBe(riseUtc < utc && utc < setUtc);
+      if (Date.parse(setUtc) - Date.parse(riseUtc) > 20 * 3.6e6) high++;
+    }
+  }
+  expect(whole).toBeGreaterThan(350);
+  expect(high).toBeGreaterThan(0); // stays of more than 20 h are among them
+});
+
 test("0°N 180°E is the same place as 180°W, to the byte but for its name", () => {
   const at = (longitude: number) =>
     plan("moon-earth", [0, longitude, 0], "2026", "2026-04").map((row) => ({ ...row, site: "" }));
