@@ -272,3 +272,11 @@ describe("years that the series do not reach", () => {
     },
   );
 });
+
+test("docs/centuries.md shows the rows that its command prints", async () => {
+  const page = readFileSync(new URL("../../docs/centuries.md", import.meta.url), "utf8");
+  const [, command = "", shown = ""] = /```console\n\$ apsidary ([^\n]*)\n([^`]*)```/.exec(page) ?? [];
+  const rows = (text: string) => text.split("\n").filter((line) => line.startsWith("1099-"));
+  expect(rows(shown).length).toBe(2);
+  expect(rows(await answer(...command.split(" ")))).toEqual(rows(shown));
+});
