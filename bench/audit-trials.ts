@@ -369,14 +369,16 @@ const quick = process.argv.includes("--quick");
 const started = performance.now();
 const right = [rightRows(), ...(quick ? [] : [rightRows()])];
 const whole = [
-  ...wholeLists("minute", quick ? [5, 10, 26] : [5, 10, 26, 100], quick ? 8 : 40),
-  ...(quick ? [] : wholeLists("hour", [10, 26], 12)),
-  ...(quick ? [] : wholeLists("day", [26, 100], 8)),
+  ...wholeLists("minute", quick ? [5, 10] : [5, 10, 26], quick ? 8 : 14),
+  ...(quick ? [] : wholeLists("minute", [100], 4)),
+  ...(quick ? [] : wholeLists("hour", [26], 6)),
+  ...(quick ? [] : wholeLists("day", [26], 4)),
 ];
 const single = [
-  ...singleSlips("minute", quick ? [1, 26] : [1, 5, 26, 100], quick ? 12 : 40),
-  ...(quick ? [] : singleSlips("hour", [26], 20)),
-  ...(quick ? [] : singleSlips("day", [26], 20)),
+  ...singleSlips("minute", quick ? [1, 26] : [1, 5, 26], quick ? 12 : 30),
+  ...(quick ? [] : singleSlips("minute", [100], 4)),
+  ...(quick ? [] : singleSlips("hour", [26], 8)),
+  ...(quick ? [] : singleSlips("day", [26], 6)),
 ];
 const text = `<!-- trials -->
 

@@ -1,5 +1,8 @@
+import type { PassageRow } from "../passages/to-row.ts";
 import type { Column } from "../report/column.ts";
 import { groupedNumber } from "../report/grouped-number.ts";
+import { printedTime } from "../report/printed-time.ts";
+import { printedUnit } from "../report/printed-unit.ts";
 import { textTable } from "../report/text-table.ts";
 import { wrapped } from "../report/wrapped.ts";
 import type { AuditRow, Verdict } from "./audit-row.ts";
@@ -58,8 +61,7 @@ export function* auditReport(
   }
   if (end.missing.length > 0) {
     yield `\nMissing from the list: ${groupedNumber(end.missing.length, 0)} of the passages between its first and last\n\n`;
-    for (const row of end.missing.slice(0, 50))
-      yield `${row.utc.slice(0, 16).replace("T", " ")}  ${row.pair} ${row.term}\n`;
+    for (const row of end.missing.slice(0, 50)) yield `${missingLine(row)}\n`;
     if (end.missing.length > 50) yield `… and ${groupedNumber(end.missing.length - 50, 0)} more.\n`;
   }
   if (end.duplicates.length > 0) {
@@ -68,4 +70,10 @@ export function* auditReport(
     if (end.duplicates.length > 50) yield `… and ${groupedNumber(end.duplicates.length - 50, 0)} more.\n`;
   }
   yield "\nTimes are right as they stand when some instant within the computed one's bound (99.9 %) rounds to them.\n";
+}
+
+/** A passage that a list has not: `2024-07-05 05:06 UTC  earth-sun aphelion`. */
+export function missingLine(row: PassageRow): string {
+  const at = printedTime(Date.parse(row.utc), printedUnit(row.utcUncertaintySeconds));
+  return `${at} ${row.utcBasis === "delta-t" ? "UT" : "UTC"}  ${row.pair} ${row.term}`;
 }

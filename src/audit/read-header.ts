@@ -44,7 +44,8 @@ const WHENS: readonly string[] = [
   "tt",
 ];
 /** Columns of our own answers that say nothing of what was published. */
-const IGNORED = /uncertainty|acceleration|existence|accuracy|source|rank|point|tdbseconds|half-width|±/i;
+const IGNORED =
+  /^(?:printedutc|sinceutc|untilutc)$|^looked|percent|uncertainty|acceleration|existence|accuracy|source|rank|point|tdbseconds|half-width|±/i;
 
 /**
  * Gives what a column holds by its heading, or `null` where it says nothing of a passage.
@@ -64,6 +65,9 @@ export function readHeading(heading: string): ColumnRole | null {
   if (rank >= 0) {
     const scale = name.includes("utc") ? auditScale("utc") : name === "tdb" || name === "tt" ? auditScale(name) : null;
     return { role: "when", kind: null, scale, rank };
+  }
+  if (name === "printedkm" || name === "printedau") {
+    return { role: "distance", kind: null, unit: name === "printedkm" ? "km" : "au", rank: -1 };
   }
   const kind = readKind(name)?.kind ?? null;
   const unit = distanceUnit(name);

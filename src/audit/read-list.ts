@@ -53,7 +53,7 @@ export async function* readList(
     return;
   }
   settings.dayFirst = dateOrder(beginning);
-  const read = lineReader(format, settings);
+  const read = lineReader(format, settings, hasHeading(beginning, format));
   for await (const block of splitRecords(all, () => format !== "text")) yield block.map(read);
 }
 
@@ -98,8 +98,16 @@ function readJsonRecord(record: ListRecord, settings: ReadSettings): ReadRecord 
   return { ...record, rows: readJsonRow(record, settings) };
 }
 
+/** Whether a heading comes, so that what stands before it is a title. */
+function hasHeading(beginning: string, format: ListFormat): boolean {
+  const lines = beginning.split(/\r\n|\n|\r/).slice(0, 60);
+  return lines.some(
+    (line) => headingOf(splitCells(line, SEPARATORS[format], 200).map(({ value }) => decoded(value))) !== null,
+  );
+}
+
 /** Keeps what lines before have said: the heading, a year, a body that stands over its rows. */
-function lineReader(format: ListFormat, settings: ReadSettings): (record: ListRecord) => ReadRecord {
+function lineReader(format: ListFormat, settings: ReadSettings, heading: boolean): (record: ListRecord) => ReadRecord {
   let columns: readonly (ColumnRole | null)[] | null = null;
   let headed = false;
   const context: { pair: Pair | null } = { pair: null };
@@ -120,6 +128,8 @@ function lineReader(format: ListFormat, settings: ReadSettings): (record: ListRe
     let rows: readonly (ListRow | UnreadRow)[];
     if (format === "text") rows = readLooseLine(record.line, line, cells, values, columns, settings, context);
     else if (columns) rows = readCells(record.line, cells, values, columns, settings);
+    else if (heading)
+      rows = []; // a title before the heading
     else {
       throw new ApsidaryError(
         "bad-input",

@@ -25,7 +25,7 @@ export function readLooseLine(
   settings: ReadSettings,
   context: { pair: Pair | null },
 ): readonly (ListRow | UnreadRow)[] {
-  const only = values.length === 1 ? readPair(values[0] ?? "") : null;
+  const only = values.length === 1 ? readPair((values[0] ?? "").replace(/ about the .*$| *:$/, "")) : null;
   if (only) {
     context.pair = only;
     return [];

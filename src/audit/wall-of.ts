@@ -44,5 +44,23 @@ export function tdbNear(scale: AuditScale, wallSeconds: number): number {
 /** Seconds east of UTC at a UTC reading. */
 export function offsetSeconds(scale: AuditScale, utcWall: number): number {
   if (scale.kind !== "zone") return 0;
-  return scale.zone.offset((utcWall - POSIX_EPOCH_DAY * DAY_SECONDS) * 1000) * 60;
+  if (scale.zone.isUniversal) return scale.zone.offset(0) * 60;
+  // offsets change on quarters of an hour; the run-time takes long to look one up
+  const quarter = Math.floor(utcWall / 900);
+  let known = offsets.get(scale);
+  if (!known) {
+    known = new Map();
+    offsets.set(scale, known);
+  }
+  let seconds = known.get(quarter);
+  if (seconds === undefined) {
+    seconds = scale.zone.offset((quarter * 900 - POSIX_EPOCH_DAY * DAY_SECONDS) * 1000) * 60;
+    if (known.size >= MOST_OFFSETS) known.clear();
+    known.set(quarter, seconds);
+  }
+  return seconds;
 }
+
+/** Only remembers what can be worked out again. */
+const offsets = new WeakMap<AuditScale, Map<number, number>>();
+const MOST_OFFSETS = 20_000;
