@@ -14,11 +14,18 @@ export {
 export type { Accuracy, AccuracyBasis, Motion, Source, Span } from "./ephemeris/source.ts";
 export type { KernelAccuracy } from "./ephemeris/user-kernel.ts";
 export { ApsidaryError, type ErrorCode } from "./error.ts";
+export { type Elements, type ElementsError, type ElementsGiven, readElements } from "./orbit/elements.ts";
+export { elementsTrack } from "./orbit/elements-track.ts";
+export { type FunctionGiven, functionTrack } from "./orbit/function-track.ts";
 export type { Orbit, OrbitField } from "./orbit/orbit.ts";
 export { orbitFrom } from "./orbit/orbit-from.ts";
 export type { OrbitGiven } from "./orbit/orbit-given.ts";
 export { parseQuantity, type Quantity } from "./orbit/quantity.ts";
+export type { StateTable } from "./orbit/table-interpolation.ts";
+export { type TableGiven, tableTrack } from "./orbit/table-track.ts";
 export { type ApsisTerms, type ApsisWords, type Centre, terms } from "./orbit/terms.ts";
+export type { Track } from "./orbit/track.ts";
+export type { TrackScale, TrackTime } from "./orbit/track-time.ts";
 export { type BodyShare, type TwoBodyShares, twoBodyShares } from "./orbit/two-body-shares.ts";
 export { mergedPassages } from "./passages/merged-passages.ts";
 export { type Nearness, type NearWindow, nearWindow } from "./passages/near-window.ts";
