@@ -155,6 +155,6 @@ function headingOf(values: readonly string[]): readonly (ColumnRole | null)[] | 
   if (!roles.has("when") && !roles.has("date") && !(roles.has("year") && roles.has("time"))) return null;
   // a row of loose text may hold the word perihelion alone
   if (named === 1 && values.length > 1 && values.some((value) => readPair(value) && !readKind(value))) return null;
-  if (values.length === 1 && /\d/.test(values[0] ?? "")) return null;
+  if (values.length === 1) return null; // prose
   return columns;
 }
