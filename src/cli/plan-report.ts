@@ -36,6 +36,8 @@ const REASONS: Record<WhyNot | WhyNoRise | WhyNoTransit, string> = {
   "stays-down": "it stays down",
   pole: "a pole has no meridian",
 };
+/** What hangs on the Earth's turning is told by the clock that turns with it: an error of that clock moves it only as far as the body, at most the Moon, moves on. */
+const SKY_SHARE = 25;
 /** Windows that are written out. */
 const MOST_WINDOWS = 8;
 
@@ -76,7 +78,9 @@ export function* planReport(rows: Iterable<PlanRow>, report: PlanReport): Genera
 
 function paragraph(row: PlanRow): string {
   const scaleSeconds = Math.sqrt(Math.max(0, row.utcUncertaintySeconds ** 2 - row.timeUncertaintySeconds ** 2));
-  const when = (utc: string, seconds = scaleSeconds) => timeIn(row.zone, utc, seconds);
+  const ofDistance = (utc: string) => utc === row.nearFromUtc || utc === row.nearToUtc;
+  const when = (utc: string, seconds = ofDistance(utc) ? scaleSeconds : scaleSeconds / SKY_SHARE) =>
+    timeIn(row.zone, utc, seconds);
   /** Without the date where it is the passage's own. */
   const near = (utc: string | null, why: string | null) => {
     if (utc === null) return `none (${REASONS[why as keyof typeof REASONS] ?? "the sources end"})`;
@@ -116,7 +120,8 @@ function paragraph(row: PlanRow): string {
         : `best within a day: ${when(row.bestUtc)}, altitude ${degrees(row.bestAltitudeDeg)}${size(row.bestDiameterArcmin)}`,
     ),
   );
-  const edge = (utc: string | null) => (utc === null ? "(the sources end)" : when(utc));
+  const open = row.whyNoNear === "stays-near" ? "(more than ten periods)" : "(the sources end)";
+  const edge = (utc: string | null) => (utc === null ? open : when(utc));
   const hours = row.windows.reduce((sum, { fromUtc, toUtc }) => sum + clockOf(toUtc) - clockOf(fromUtc), 0) / 3_600_000;
   const listed = row.windows
     .slice(0, MOST_WINDOWS)
@@ -156,7 +161,7 @@ function explanations({ within, minAltitudeDeg, darkBelowDeg, refraction, window
   const low = sites.some(({ heightM }) => heightM < 0);
   return [
     `Near: within ${limit} of the extreme distance. Up: centre above ${minAltitudeDeg}°. Dark: Sun's centre below ${darkBelowDeg}° (of the Sun itself this does not count). ` +
-      `Windows: near, up and dark, looked for within ${windowDays} d of the passage.`,
+      `Windows: near, up and dark, looked for within ${windowDays} d of the passage, at most one period.`,
     `Altitude and azimuth (from north through east) are of the apparent place from the site by WGS 84, ${refraction ? "lifted by standard air" : "without refraction"}; the Sun's always without. ` +
       "Rise and set: the centre through altitude 0, of the stay above the horizon at the passage or nearest to it.",
     "The passage belongs to the distance from centre to centre; distance and width from the site are topocentric.",

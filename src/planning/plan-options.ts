@@ -23,7 +23,7 @@ export interface PlanOptions {
   readonly darkBelowDeg?: number;
   /** Whether the air lifts bodies (default: not). */
   readonly refraction?: boolean;
-  /** How far from a passage windows are looked for, days (default 60): the near interval of a slow planet lasts for years. */
+  /** How far from a passage windows are looked for, days (default 60), at most one period: the near interval of a slow planet lasts for years. */
   readonly windowDays?: number;
   /** Which sources may serve (default: the best at each time). */
   readonly source?: SourceChoice;

@@ -60,6 +60,7 @@ export const PLAN_NAMES = [
   "nearFromUtc",
   "nearToUtc",
   "nearCut",
+  "whyNoNear",
   "windows",
   "windowsCut",
   "whyNot",

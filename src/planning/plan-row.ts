@@ -1,4 +1,5 @@
 import type { PassageRow } from "../passages/to-row.ts";
+import type { WhyNoNear } from "./near-interval.ts";
 
 /** Why a body does not rise or set around a passage. */
 export type WhyNoRise = "stays-up" | "stays-down" | "no-data";
@@ -66,8 +67,9 @@ export interface PlanRow extends PassageRow {
   /** While the distance of the pair stays within the limit of its extreme. */
   readonly nearFromUtc: string | null;
   readonly nearToUtc: string | null;
-  /** Whether the sources end before the distance leaves the limit. */
+  /** Whether one of these ends is not known. */
   readonly nearCut: boolean;
+  readonly whyNoNear: WhyNoNear | null;
   /** Near and up and dark. */
   readonly windows: readonly PlanWindow[];
   /** Whether the near interval reaches farther than windows are looked for. */

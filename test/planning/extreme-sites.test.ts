@@ -205,9 +205,27 @@ describe("where the sources end", () => {
     const site = { latitudeDeg: 46.5, longitudeDeg: 8, heightM: 0 };
     const query = { pair: "earth-sun", site, from: "2060-01-01", to: "2060-01-20", sky } as const;
     const [row] = planSeason(kernelOnly, query);
-    expect(row).toMatchObject({ nearToUtc: null, nearCut: true });
+    expect(row).toMatchObject({ nearToUtc: null, nearCut: true, whyNoNear: "no-data" });
     expect(row?.nearFromUtc).toMatch(/^2059-/);
     expect(row?.windows.length).toBeGreaterThan(0);
+  });
+
+  test("a distance that never leaves the limit has no near interval's ends, says so, and is not followed for ever", () => {
+    // the orbit of Venus has an eccentricity of 0.0068: its distance changes by 1.4 %
+    for (const row of plan("venus-sun", [46.5, 8, 0], "2026", "2028", { within: { percent: 5 } })) {
+      expect(row).toMatchObject({
+        nearFromUtc: null,
+        nearToUtc: null,
+        nearCut: true,
+        whyNoNear: "stays-near",
+        windowsCut: true,
+      });
+    }
+    // 14 % above some perigees lie only the farther apogees: an end may be there on one side alone
+    for (const row of plan("moon-earth", [46.5, 8, 0], "2026", "2027", { within: { km: 49_300 } })) {
+      expect(row.whyNoNear === null).toBe(row.nearFromUtc !== null && row.nearToUtc !== null);
+      if (row.nearToUtc !== null) expect(row.nearToUtc > row.utc).toBe(true);
+    }
   });
 
   test("a source named alone serves for the sky as well", () => {
