@@ -1,25 +1,25 @@
-// How long calendars take against the bare finder: `npm run build && node bench/calendar.mjs`. Whole runs of the command, the least
-// of some, as ratios to `apsidary passages` for the same pairs and span in the same form of run; and the most memory that they held.
+// What calendars cost against the bare finder: `npm run build && node bench/calendar.mjs`. Processor time of whole runs of the command, the
+// least of some, as ratios to `apsidary passages` for the same pairs and span; and the most memory that they held.
 import { spawnSync } from "node:child_process";
 import { fileURLToPath } from "node:url";
 
 const command = fileURLToPath(new URL("../dist/cli.js", import.meta.url));
 const PAIRS = "earth-sun,moon-earth,mercury-sun,venus-sun,mars-sun,jupiter-sun,saturn-sun,uranus-sun,neptune-sun";
-const TELL = 'process.on("exit",()=>process.stderr.write("\\nmaxRSS "+process.resourceUsage().maxRSS))';
+const TELL =
+  'process.on("exit",()=>{const u=process.resourceUsage();process.stderr.write("\\ncpu "+(u.userCPUTime+u.systemCPUTime)+" maxRSS "+u.maxRSS)})';
 
 /** Runs the command some times; gives the least seconds and the memory in MB. */
 function run(times, ...args) {
   let seconds = Number.POSITIVE_INFINITY;
   let megabytes = 0;
   for (let i = 0; i < times; i++) {
-    const start = performance.now();
     const { status, stderr } = spawnSync(
       process.execPath,
       [`--import=data:text/javascript,${encodeURIComponent(TELL)}`, command, ...args],
       { encoding: "utf8", maxBuffer: 1e9, env: { ...process.env, SOURCE_DATE_EPOCH: "1767225600" } },
     );
     if (status !== 0) throw new Error(stderr);
-    seconds = Math.min(seconds, (performance.now() - start) / 1000);
+    seconds = Math.min(seconds, Number(/cpu (\d+)/.exec(stderr)?.[1]) / 1e6);
     megabytes = Math.max(megabytes, Number(/maxRSS (\d+)/.exec(stderr)?.[1]) / 1024);
   }
   return { seconds, megabytes };
