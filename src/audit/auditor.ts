@@ -335,8 +335,9 @@ function judgedRow(row: ListRow, one: Case, list: ListState): { row: AuditRow; m
   const distance = row.distance && !unmatched ? judgeDistance(one, row.distance, time.cause, list.cutDistances) : null;
   const verdict = distance ? worse(time.verdict, distance.verdict) : time.verdict;
   const rule = list.habit.rule(one.when);
-  const rightWhen = writeWhen(wallOf(row.scale, one.at), one.when, rule === "other" && !one.when.whole);
-  const rightDistance = row.distance ? writeDistance(one.at.passage.distanceKm, row.distance) : "";
+  const isWrong = verdict !== "agrees" && verdict !== "undecided";
+  const rightWhen = isWrong ? writeWhen(wallOf(row.scale, one.at), one.when, rule === "other" && !one.when.whole) : "";
+  const rightDistance = isWrong && row.distance ? writeDistance(one.at.passage.distanceKm, row.distance) : "";
   const cause = time.cause?.name ?? distance?.cause ?? null;
   const detail = time.cause ? time.detail : (distance?.detail ?? "");
   const alternatives: Alternative[] = [...time.alternatives, ...(distance?.alternatives ?? [])];
@@ -360,7 +361,7 @@ function judgedRow(row: ListRow, one: Case, list: ListState): { row: AuditRow; m
       passage: one.at.row(),
       sentence: sentenceOf(row, one, time, distance, rightWhen, rightDistance),
     }),
-    mends: mendsOf(row, time, distance, rightWhen, rightDistance),
+    mends: isWrong ? mendsOf(row, time, distance, rightWhen, rightDistance) : [],
   };
 }
 

@@ -31,8 +31,9 @@ export async function* splitRecords(
     rest += chunk;
     const block: ListRecord[] = [];
     let from = 0;
+    const endOf = recordEnds(rest, false);
     for (;;) {
-      const end = recordEnd(rest, from, quotes(), false);
+      const end = endOf(from, quotes());
       if (end < 0) break;
       const text = rest.slice(from, end);
       block.push({ line, text });
@@ -50,8 +51,9 @@ export async function* splitRecords(
   }
   const block: ListRecord[] = [];
   let from = 0;
+  const endOf = recordEnds(rest, true);
   while (from < rest.length) {
-    const end = recordEnd(rest, from, quotes(), true);
+    const end = endOf(from, quotes());
     const text = rest.slice(from, end);
     block.push({ line, text });
     line += linesOf(text);
@@ -60,37 +62,48 @@ export async function* splitRecords(
   if (block.length > 0) yield block;
 }
 
-/** Where the record that begins at `from` ends, its line ending included; −1 where more text is needed. */
-function recordEnd(text: string, from: number, quotes: boolean, last: boolean): number {
-  const first = lineEnd(text, from, last);
-  if (first < 0 || !quotes) return first;
-  let end = first;
-  for (let lines = 1; lines < MOST_LINES; lines++) {
-    if (countQuotes(text, from, end) % 2 === 0) return end;
-    if (end >= text.length) return last ? first : -1;
-    const next = lineEnd(text, end, last);
-    if (next < 0) return -1;
-    end = next;
-  }
-  return first;
+/** Where the next of a character stands, looked for once and not once a line: a list without quotes costs one search a chunk. */
+function finder(text: string, character: string): (from: number) => number {
+  let found = -2;
+  return (from) => {
+    if (found === -2 || (found >= 0 && found < from)) found = text.indexOf(character, from);
+    return found;
+  };
 }
 
-function lineEnd(text: string, from: number, last: boolean): number {
-  const feed = text.indexOf("\n", from);
-  if (feed >= 0) {
-    const carriage = text.indexOf("\r", from);
+/** Gives a function that tells where the record that begins at `from` ends, its line ending included; −1 where more text is needed. */
+function recordEnds(text: string, last: boolean): (from: number, quotes: boolean) => number {
+  const nextReturn = finder(text, "\r");
+  const nextQuote = finder(text, '"');
+  const lineEnd = (from: number): number => {
+    const feed = text.indexOf("\n", from);
+    const carriage = nextReturn(from);
     // a carriage return alone ends a line as well
-    return carriage >= 0 && carriage < feed - 1 ? carriage + 1 : feed + 1;
-  }
-  const carriage = text.indexOf("\r", from);
-  if (carriage >= 0 && (last || carriage < text.length - 1)) return carriage + 1;
-  return last ? text.length : -1;
-}
-
-function countQuotes(text: string, from: number, to: number): number {
-  let count = 0;
-  for (let at = text.indexOf('"', from); at >= 0 && at < to; at = text.indexOf('"', at + 1)) count++;
-  return count;
+    if (carriage >= 0 && (feed < 0 || carriage < feed - 1) && (last || carriage < text.length - 1)) {
+      return text[carriage + 1] === "\n" ? carriage + 2 : carriage + 1;
+    }
+    if (feed >= 0) return feed + 1;
+    return last ? text.length : -1;
+  };
+  return (from, quotes) => {
+    const first = lineEnd(from);
+    if (first < 0 || !quotes) return first;
+    let end = first;
+    let open = false;
+    let counted = from;
+    for (let lines = 1; lines < MOST_LINES; lines++) {
+      for (let at = nextQuote(counted); at >= 0 && at < end; at = nextQuote(at + 1)) {
+        open = !open;
+        counted = at + 1;
+      }
+      if (!open) return end;
+      if (end >= text.length) return last ? first : -1;
+      const next = lineEnd(end);
+      if (next < 0) return -1;
+      end = next;
+    }
+    return first;
+  };
 }
 
 function linesOf(text: string): number {

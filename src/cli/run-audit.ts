@@ -1,6 +1,7 @@
 import { AUDIT_FIELDS, flatAuditRow } from "../audit/audit-fields.ts";
 import { auditReport, MOST_SHOWN } from "../audit/audit-report.ts";
 import type { AuditRow } from "../audit/audit-row.ts";
+import { auditRowJson } from "../audit/audit-row-json.ts";
 import { type AuditOptions, auditStream } from "../audit/audit-stream.ts";
 import type { AuditEnd, AuditedRecord } from "../audit/auditor.ts";
 import { isUnreadRow } from "../audit/list-row.ts";
@@ -10,7 +11,6 @@ import { pairOf } from "../bodies/pair.ts";
 import type { Ephemeris } from "../ephemeris/open-sources.ts";
 import { ApsidaryError } from "../error.ts";
 import { csvLines } from "../report/csv-lines.ts";
-import { jsonLines } from "../report/json-lines.ts";
 import { zoneOf } from "../time/zone-of.ts";
 import { AUDIT_FORMATS, type AuditCommandOptions } from "./audit.ts";
 import { auditInput } from "./audit-input.ts";
@@ -58,6 +58,7 @@ export async function runAudit(file: string, options: AuditCommandOptions): Prom
     mended = options.corrected === undefined ? null : await openDestination(options.corrected);
     const stream = auditStream(ephemeris, list, { ...reading, source });
     const gathered: Gathered = { toMend: [], charted: [] };
+    const jsonOf = auditRowJson();
     const progress = progressOf(mayShowProgress(options.out));
     let made: Provenance | null = null;
     let count = 0;
@@ -71,8 +72,8 @@ export async function runAudit(file: string, options: AuditCommandOptions): Prom
       made ??= await provenanceFor(ephemeris, next.value, source);
       const rows = next.value.flatMap(({ rows }) => rows.map(({ row }) => row));
       gather(gathered, rows);
-      if (format === "json") await destination.write(jsonRows(rows, count, made));
-      else if (format === "ndjson") await destination.write([...jsonLines(rows)].join(""));
+      if (format === "json") await destination.write(jsonRows(rows.map(jsonOf), count, made));
+      else if (format === "ndjson") await destination.write(rows.map((row) => `${jsonOf(row)}\n`).join(""));
       else if (format === "csv") await destination.write(csvRows(rows, count === 0));
       count += rows.length;
       if (mended) await mended.write(bytesOf(next.value));
@@ -152,9 +153,9 @@ async function provenanceFor(
   return provenanceOf(ephemeris, { pairs: [...pairs], span: { from, to }, source });
 }
 
-function jsonRows(rows: readonly AuditRow[], before: number, made: Provenance): string {
+function jsonRows(rows: readonly string[], before: number, made: Provenance): string {
   const head = before === 0 ? jsonHead(made) : "";
-  return head + rows.map((row, i) => `${before + i === 0 ? "" : ","}\n${JSON.stringify(row)}`).join("");
+  return head + rows.map((row, i) => `${before + i === 0 ? "" : ","}\n${row}`).join("");
 }
 
 function jsonHead(made: Provenance): string {
