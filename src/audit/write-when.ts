@@ -32,7 +32,7 @@ function fieldText(
 ): string {
   switch (part.field) {
     case "year":
-      return date.year < 0 ? `-${padded(-date.year, part.width - 1)}` : padded(date.year, part.width);
+      return date.year < 0 ? `-${padded(-date.year, Math.max(4, part.width - 1))}` : padded(date.year, part.width);
     case "month":
       return padded(date.month, part.width);
     case "monthName":
