@@ -9,11 +9,11 @@ export function cautionsOf({
   targetPoint,
   centrePoint,
 }: {
-  readonly targetPoint: number;
-  readonly centrePoint: number;
+  readonly targetPoint: number | null;
+  readonly centrePoint: number | null;
 }): string[] {
   const notes: string[] = [];
-  if (targetPoint >= POINTS.jupiter && targetPoint <= POINTS.pluto) {
+  if (targetPoint !== null && targetPoint >= POINTS.jupiter && targetPoint <= POINTS.pluto) {
     notes.push(
       "jupiter to pluto stand for the barycentre of the planet and its moons, not for the planet's own centre.",
     );

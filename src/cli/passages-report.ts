@@ -11,10 +11,23 @@ import { printedJulian, printedUtc } from "./printed-utc.ts";
 import type { Provenance } from "./provenance.ts";
 
 /** A row of `passages` as it is given out. */
-export interface ListedPassage extends PassageRow {
+export interface ListedPassage extends Omit<PassageRow, "pair" | "targetPoint" | "centrePoint"> {
+  readonly pair: string;
+  /** `null` where a track's point has no SPK id. */
+  readonly targetPoint: number | null;
+  readonly centrePoint: number | null;
+  /** Of a track: distance less the radius of the body; `null` where none is known. Only where tracks were given. */
+  readonly heightKm?: number | null;
   /** `utc` in the Julian calendar, `null` from 1582-10-15 on; only where that calendar was asked for. */
   readonly utcJulian?: string | null;
 }
+
+const HEIGHT: Column<ListedPassage> = {
+  title: "height",
+  unit: "km",
+  values: (row) => row.heightKm ?? null,
+  digits: (row) => halfWidth(row).digits,
+};
 
 const COLUMNS: readonly Column<ListedPassage>[] = [
   {
@@ -46,6 +59,8 @@ const MARKS = {
   Julian: "a date of the Julian calendar; dates of rows without this mark, and in the lines below, are Gregorian",
   predicted: "after the leap-second list expires; its last offset is held",
   assumed: "a kernel of unknown accuracy, taken to be as good as the built-in one",
+  digits:
+    "the half-widths follow from the digits that your data are written with; give their uncertainties if you know them",
 } as const;
 type Mark = keyof typeof MARKS;
 const MARK_NAMES = Object.keys(MARKS) as readonly Mark[];
@@ -58,11 +73,13 @@ const MARK_NAMES = Object.keys(MARKS) as readonly Mark[];
  * @param title what was asked
  * @param rows  taken one at a time
  * @param made  the provenance
+ * @param heights whether there are tracks, whose heights stand beside their distances
  */
 export function* passagesReport(
   title: string,
   rows: Iterable<ListedPassage>,
   made: Provenance,
+  heights = false,
 ): Generator<string, void, undefined> {
   let count = 0;
   const marks = new Set<Mark>();
@@ -76,7 +93,7 @@ export function* passagesReport(
     }
   };
   yield `${title}\n\n`;
-  yield* textTable(COLUMNS, watched());
+  yield* textTable(heights ? [...COLUMNS.slice(0, -2), HEIGHT, ...COLUMNS.slice(-2)] : COLUMNS, watched());
   yield count === 0 ? "No passage in this span.\n" : "\n";
   for (const mark of MARK_NAMES) if (marks.has(mark)) yield wrapped(`${mark}: ${MARKS[mark]}.`, 100, "  ");
   if (count > 0) {
@@ -87,7 +104,7 @@ export function* passagesReport(
   yield footOf(made, { deltaT: marks.has("UT"), zones: false });
 }
 
-function shortTerm(row: PassageRow): string {
+function shortTerm(row: ListedPassage): string {
   return row.term.replace(/ of distance$/, "");
 }
 
@@ -96,7 +113,7 @@ function julianOf(row: ListedPassage): string | null {
   return row.utcJulian === undefined ? null : printedJulian(row.utc, row.utcUncertaintySeconds);
 }
 
-function halfWidth(row: PassageRow) {
+function halfWidth(row: ListedPassage) {
   return printedHalfWidth(row.distanceUncertaintyKm);
 }
 
@@ -108,6 +125,6 @@ function marksOf(row: ListedPassage): Mark[] {
   if (row.utcBasis === "delta-t") marks.push("UT");
   if (julianOf(row) !== null) marks.push("Julian");
   if (row.utcBasis === "predicted") marks.push("predicted");
-  if (row.accuracyBasis === "assumed") marks.push("assumed");
+  if (row.accuracyBasis === "assumed") marks.push(row.targetPoint === null ? "digits" : "assumed");
   return marks;
 }

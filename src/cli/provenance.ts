@@ -30,7 +30,7 @@ export interface UsedSource {
 
 /** What was asked, as far as it decides which sources serve. */
 export interface Asked {
-  readonly pairs: readonly Pair[];
+  readonly pairs: readonly Pair<string>[];
   /** TDB seconds past J2000. */
   readonly span: Span;
   readonly source: SourceChoice;

@@ -1,8 +1,9 @@
 import type { Pair } from "../bodies/pair.ts";
+import type { TrackPair } from "../bodies/track-pair.ts";
 import type { Ephemeris } from "../ephemeris/open-sources.ts";
 import { ApsidaryError } from "../error.ts";
 import { mergedPassages } from "../passages/merged-passages.ts";
-import type { Passage } from "../passages/passage.ts";
+import type { Passage, TrackPassage } from "../passages/passage.ts";
 import type { PassageQuery } from "../passages/passages.ts";
 import { timelineFor } from "../passages/timeline-for.ts";
 import { toRow } from "../passages/to-row.ts";
@@ -12,6 +13,7 @@ import { choiceOf, shown } from "./choice-of.ts";
 import { edgeOf, requireOrder, tellingCalendar } from "./edge.ts";
 import { openFor } from "./open-for.ts";
 import { type Calendar, calendarOf, formatOf, JULIAN_TITLE, sourceChoiceOf } from "./options.ts";
+import { tracksOf } from "./orbit-tracks.ts";
 import { pairsOf } from "./pairs.ts";
 import type { PassagesOptions } from "./passages.ts";
 import { type ListedPassage, passagesReport } from "./passages-report.ts";
@@ -49,15 +51,17 @@ const NAMES: readonly (keyof ListedPassage)[] = [
  * @throws ApsidaryError for whatever cannot be used, before anything is written
  */
 export async function runPassages(words: readonly string[], options: PassagesOptions): Promise<void> {
+  requirePairs(words, options);
   const format = formatOf(options);
   const source = sourceChoiceOf(options);
   const kind = choiceOf("--kind", options.kind ?? "both", ["periapsis", "apoapsis", "both"]);
   const rank = choiceOf("--rank", options.rank ?? "all", ["principal", "all"]);
   const calendar = calendarOf(options);
   const count = countOf(options);
-  const pairs = pairsOf(words);
+  const tracks = await tracksOf(options);
+  const pairs = [...(words.length > 0 ? pairsOf(words) : []), ...tracks.map((track) => track.pair)];
 
-  const ephemeris = await openFor(options);
+  const ephemeris = await openFor(options, tracks);
   const edge = (option: "--from" | "--to", given?: string) => edgeOf(option, given, ephemeris.leapSeconds, calendar);
   const from = edge("--from", options.from);
   const what = { kind, rank, source };
@@ -73,24 +77,39 @@ export async function runPassages(words: readonly string[], options: PassagesOpt
   const watched = withProgress(found, (passage) => passage.tdbSeconds, from, to, mayShowProgress(options.out));
   const pieces = await answerPieces<ListedPassage>(format, {
     head: { schema: "apsidary/passages/1", made },
-    names: calendar === "julian" ? [...NAMES, "utcJulian"] : NAMES,
-    rows: rowsOf(watched, ephemeris, count ?? Infinity, calendar),
-    report: (rows) => passagesReport(titleOf(pairs, options), rows, made),
+    names: [
+      ...NAMES,
+      ...(tracks.length > 0 ? (["heightKm"] as const) : []),
+      ...(calendar === "julian" ? (["utcJulian"] as const) : []),
+    ],
+    rows: rowsOf(watched, ephemeris, count ?? Infinity, calendar, tracks.length > 0),
+    report: (rows) => passagesReport(titleOf(pairs, options), rows, made, tracks.length > 0),
   });
   await writeAnswer(pieces, options.out);
 }
 
+/** Asks for a pair where neither a pair nor a track is named. @throws ApsidaryError `bad-input` */
+function requirePairs(words: readonly string[], { elements, table }: PassagesOptions): void {
+  if (words.length > 0 || elements !== undefined || table !== undefined) return;
+  throw new ApsidaryError(
+    "bad-input",
+    "the argument <pairs> is missing; name a pair such as moon-earth, or give --elements or --table. See: apsidary passages --help",
+  );
+}
+
 function* rowsOf(
-  found: Iterable<Passage>,
+  found: Iterable<Passage | TrackPassage>,
   ephemeris: Ephemeris,
   most: number,
   calendar: Calendar,
+  heights: boolean,
 ): Generator<ListedPassage, void, undefined> {
   let count = 0;
   for (const passage of found) {
     if (count === most) return;
     count++;
-    const row = toRow(passage, ephemeris);
+    const told = toRow(passage, ephemeris);
+    const row = heights ? { ...told, heightKm: "heightKm" in told ? told.heightKm : null } : told;
     yield calendar === "julian" ? { ...row, utcJulian: julianText(row.utc) } : row;
   }
 }
@@ -120,7 +139,7 @@ function countOf({ next, to }: PassagesOptions): number | null {
  */
 function endOfNext(
   ephemeris: Ephemeris,
-  pairs: readonly Pair[],
+  pairs: readonly (Pair | TrackPair)[],
   from: number,
   count: number,
   what: Pick<PassageQuery, "kind" | "rank" | "source">,
@@ -143,7 +162,7 @@ function endOfNext(
   return end;
 }
 
-function titleOf(pairs: readonly Pair[], { from = "", to, next, calendar }: PassagesOptions): string {
+function titleOf(pairs: readonly Pair<string>[], { from = "", to, next, calendar }: PassagesOptions): string {
   const which = pairs.map((pair) => pair.name).join(", ");
   const when = to === undefined ? `: ${next} from ${from} on` : `, ${from} to ${to}`;
   return `Passages of ${which}${when}${calendar === "julian" ? JULIAN_TITLE : ""}`;

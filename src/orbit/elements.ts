@@ -4,7 +4,7 @@ import { digitHalfWidth } from "./digit-half-width.ts";
 import type { OrbitAxes } from "./kepler-motion.ts";
 import type { Orbit } from "./orbit.ts";
 import { orbitFrom } from "./orbit-from.ts";
-import type { OrbitGiven } from "./orbit-given.ts";
+import { type OrbitGiven, orbitGivenNames } from "./orbit-given.ts";
 import { parseQuantity, type Quantity } from "./quantity.ts";
 import { type TrackScale, type TrackTime, trackTime } from "./track-time.ts";
 
@@ -121,11 +121,19 @@ export function meanMotionOf({ gravitationalParameterKm3S2: gm, semiMajorAxisKm:
 
 function partsOf(given: ElementsGiven) {
   if (typeof given !== "object" || given === null || Array.isArray(given)) {
-    throw bad("elements are an object such as { name: “probe-earth”, about: “earth”, … }.");
+    throw bad(`elements are an object such as { "name": "probe-earth", "about": "earth", … }.`);
   }
   const size: Record<string, unknown> = {};
   for (const [key, value] of Object.entries(given)) {
-    if (!(OTHERS as readonly string[]).includes(key)) size[key] = value;
+    if ((OTHERS as readonly string[]).includes(key)) continue;
+    const known = [...OTHERS, ...orbitGivenNames()];
+    if (value != null && !known.includes(key)) {
+      const near = nearestName(key, known);
+      throw bad(
+        `${JSON.stringify(key.slice(0, 60))} is no element${near ? `; did you mean "${near}"?` : "."} Elements are ${known.join(", ")}.`,
+      );
+    }
+    size[key] = value;
   }
   const { name, uncertainty, scale, frame } = given;
   if (typeof name !== "string" || name === "") throw bad("elements need a name: the moving point, then the centre.");

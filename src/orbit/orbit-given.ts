@@ -121,11 +121,9 @@ export function readGiven(given: OrbitGiven): { centre: Centre; items: Item[] } 
   return { centre, items };
 }
 
-function refuseUnknownNames(given: OrbitGiven): void {
-  if (typeof given !== "object" || given === null) {
-    throw bad(`an orbit is made from an object such as { about: "earth", … }, not ${String(given).slice(0, 60)}.`);
-  }
-  const known: string[] = [
+/** Gives the names of all that an orbit is made from. */
+export function orbitGivenNames(): string[] {
+  return [
     "about",
     "companion",
     "equatorialRadiusKm",
@@ -133,6 +131,13 @@ function refuseUnknownNames(given: OrbitGiven): void {
     ...HEIGHTS.map(([field]) => field),
     ...PLAIN_FIELDS,
   ];
+}
+
+function refuseUnknownNames(given: OrbitGiven): void {
+  if (typeof given !== "object" || given === null) {
+    throw bad(`an orbit is made from an object such as { about: "earth", … }, not ${String(given).slice(0, 60)}.`);
+  }
+  const known = orbitGivenNames();
   for (const [name, value] of Object.entries(given)) {
     if (value === undefined || value === null || known.includes(name)) continue;
     if (name === "circularSpeedKmS" || name === "meanSpeedKmS") {

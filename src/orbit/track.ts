@@ -43,8 +43,8 @@ export function trackOf({ pair, id = pair.name, title, spans, motion, accuracy, 
   } satisfies Track);
 }
 
-/** The years −9999 to 9999 with room for half a slow period at either end, TDB seconds past J2000. */
-export const ALL_TIME: Span = Object.freeze({ from: -4.4e11, to: 3.4e11 });
+/** The years −9999 to 9999, TDB seconds past J2000. */
+export const ALL_TIME: Span = Object.freeze({ from: -3.7865e11, to: 2.5245e11 });
 
 /** SPK id of a body's own centre; `UNNAMED_POINT` where none is named. */
 export function centreOf(about: BodyName | null): PointId {

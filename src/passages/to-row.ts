@@ -39,10 +39,12 @@ export interface PassageRow {
 }
 
 /** The row of a track's passage: the name is the caller's, and the height stands beside the distance. */
-export interface TrackRow extends Omit<PassageRow, "pair" | "targetPoint"> {
+export interface TrackRow extends Omit<PassageRow, "pair" | "targetPoint" | "centrePoint"> {
   readonly pair: string;
   /** `null` where the moving point has no SPK id. */
   readonly targetPoint: number | null;
+  /** `null` where no body is named. */
+  readonly centrePoint: number | null;
   /** Distance less the reference radius; `null` where none is known. */
   readonly heightKm: number | null;
 }
@@ -58,10 +60,11 @@ export function toRow(passage: TrackPassage, scales?: Scales): TrackRow;
 export function toRow(passage: Passage | TrackPassage, scales?: Scales): PassageRow | TrackRow;
 export function toRow(passage: Passage | TrackPassage, scales?: Scales): PassageRow | TrackRow {
   if (!isTrackPassage(passage)) return Object.freeze(rowOf(passage, pairOf(passage.pair), scales));
-  const { target, referenceRadiusKm } = passage.track;
+  const { target, centre, referenceRadiusKm } = passage.track;
   return Object.freeze({
     ...rowOf(passage, passage.track, scales),
     targetPoint: target === UNNAMED_POINT ? null : target,
+    centrePoint: centre === UNNAMED_POINT ? null : centre,
     heightKm: referenceRadiusKm === null ? null : rounded(passage.distanceKm - referenceRadiusKm, 3),
   });
 }

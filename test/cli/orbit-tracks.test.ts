@@ -1,0 +1,177 @@
+import { createHash } from "node:crypto";
+import { mkdtempSync, readFileSync, rmSync, writeFileSync } from "node:fs";
+import { tmpdir } from "node:os";
+import { join } from "node:path";
+import { Ajv2020 } from "ajv/dist/2020.js";
+import addFormats from "ajv-formats";
+import { afterAll, beforeAll, describe, expect, test } from "vitest";
+import { elementsTrack } from "../../src/orbit/elements-track.ts";
+import { apsidary } from "./command.ts";
+
+const PROBE = {
+  name: "probe-earth",
+  about: "earth",
+  semiMajorAxisKm: "42164.172km",
+  eccentricity: "0.300000",
+  periapsisAt: "2027-03-01T12:00:00.0",
+  uncertainty: { semiMajorAxisKm: 0.005, eccentricity: 1e-6, periapsisAt: 2 },
+} as const;
+
+let folder: string;
+beforeAll(() => {
+  folder = mkdtempSync(join(tmpdir(), "apsidary-tracks-"));
+  const file = (name: string, text: string) => writeFileSync(join(folder, name), text);
+  file(
+    "probe.json",
+    JSON.stringify([
+      PROBE,
+      {
+        ...PROBE,
+        name: "comet-sun",
+        about: "sun",
+        eccentricity: "1.2000",
+        semiMajorAxisKm: "-5.0000au",
+        uncertainty: null,
+      },
+    ]),
+  );
+  file(
+    "probe.csv",
+    "name,about,semiMajorAxisKm,eccentricity,periapsisAt,uncertainty.semiMajorAxisKm,uncertainty.eccentricity,uncertainty.periapsisAt\r\n" +
+      "# a comment\r\nprobe-earth,earth,42164.172km,0.300000,2027-03-01T12:00:00.0,0.005,1e-6,2\r\n",
+  );
+  const track = elementsTrack(PROBE);
+  const motion = track.motion(track.pair);
+  const out = new Float64Array(6);
+  const rows = Array.from({ length: 241 }, (_, i) => {
+    const tdb = 857174400 + i * 1200;
+    motion.state(tdb, out);
+    return [tdb, ...out].map((value) => value.toFixed(6)).join(",");
+  });
+  const table = ["tdbSeconds,xKm,yKm,zKm,vxKmS,vyKmS,vzKmS", ...rows].join("\n");
+  file("flight probe.csv", table);
+  file(
+    "broken.csv",
+    table.replace(/(.*\n){100}/, (head) => `${head}857294400,1e5,0,zero,0,0,0\n`),
+  );
+  file("empty.json", "");
+  file("half.json", '[{"name": "probe-earth", ');
+  file("twice.json", JSON.stringify([PROBE, PROBE]));
+  file("odd.json", JSON.stringify({ ...PROBE, periapsisAd: 3 }));
+  file("noise.csv", String.fromCharCode(...Array.from({ length: 3000 }, (_, i) => (i * i * 31 + i * 7) % 251)));
+});
+afterAll(() => rmSync(folder, { recursive: true }));
+
+async function answer(...args: string[]): Promise<string> {
+  const { status, stdout, stderr } = await apsidary(["passages", ...args], folder);
+  expect(stderr).toBe("");
+  expect(status).toBe(0);
+  return stdout;
+}
+
+const WITHIN = ["--from", "2027-03-01T18:00", "--to", "2027-03-03T18:00"];
+const MARCH = ["--from", "2027-03-01", "--to", "2027-03-04"];
+
+describe("apsidary passages, of tracks", () => {
+  const schema = JSON.parse(readFileSync(new URL("../../docs/schema/passages.json", import.meta.url), "utf8"));
+  const ajv = new Ajv2020({ allErrors: true, strict: true, allowUnionTypes: true });
+  addFormats.default(ajv);
+  const validate = ajv.compile(schema);
+
+  test("keeps to the JSON Schema, beside pairs that the library knows, and names the file and its checksum", async () => {
+    const text = await answer(
+      "earth-sun,moon-earth",
+      "--elements",
+      "probe.json",
+      "--from",
+      "2027",
+      "--to",
+      "2027-04",
+      "--format",
+      "json",
+    );
+    const { made, rows } = JSON.parse(text);
+    validate({ made, rows, schema: "apsidary/passages/1" });
+    expect(validate.errors).toBeNull();
+    expect(made.sources[0].id).toBe("user:probe.json");
+    expect(made.sources[0].sha256).toBe(
+      createHash("sha256")
+        .update(readFileSync(join(folder, "probe.json")))
+        .digest("hex"),
+    );
+    const names = new Set(rows.map((row: { pair: string }) => row.pair));
+    expect([...names].sort()).toEqual(["comet-sun", "earth-sun", "moon-earth", "probe-earth"]);
+    for (const row of rows) expect(row.heightKm === null).toBe(row.pair === "earth-sun" || row.pair === "moon-earth");
+  });
+
+  test("gives heights above the body's radius, and the terms of its centre", async () => {
+    const { rows } = JSON.parse(await answer("--elements", "probe.json", ...MARCH, "--format", "json"));
+    const perigee = rows.find((row: { term: string }) => row.term === "perigee");
+    // a (1 − e) − 6378.1366 km
+    expect(perigee.heightKm).toBeCloseTo(42164.172 * 0.7 - 6378.1366, 2);
+    expect(perigee.tdb).toBe("2027-03-01T12:00:00.000");
+    expect(rows.filter((row: { term: string }) => row.term === "perihelion")).toHaveLength(1);
+  });
+
+  test("reads the same elements from CSV as from JSON", async () => {
+    const rowsOf = async (file: string) =>
+      JSON.parse(await answer("--elements", file, ...MARCH, "--format", "json"))
+        .rows.filter((row: { pair: string }) => row.pair === "probe-earth")
+        .map((row: object) => ({ ...row, source: "" }));
+    expect(await rowsOf("probe.csv")).toEqual(await rowsOf("probe.json"));
+  });
+
+  test("finds in a table of states the passages of the elements it was made from, within what it states", async () => {
+    const table = JSON.parse(
+      await answer("--table", "flight probe.csv", "--about", "earth", ...WITHIN, "--format", "json"),
+    ).rows;
+    const { rows } = JSON.parse(await answer("--elements", "probe.csv", ...WITHIN, "--format", "json"));
+    expect(table).toHaveLength(rows.length);
+    table.forEach((row: { tdbSeconds: number; timeUncertaintySeconds: number; pair: string }, i: number) => {
+      expect(row.pair).toBe("flight-probe");
+      expect(Math.abs(row.tdbSeconds - rows[i].tdbSeconds)).toBeLessThanOrEqual(row.timeUncertaintySeconds + 0.001);
+      expect(row.timeUncertaintySeconds).toBeLessThan(1);
+    });
+  });
+
+  test("prints heights, and says when the half-widths stand on digits alone", async () => {
+    const text = await answer("--elements", "probe.json", ...MARCH);
+    expect(text).toMatch(/probe-earth {2}perigee +29 514\.92 {2}± 0\.05 +23 136\.78 {2}user:probe\.json$/m);
+    expect(text).toMatch(/^digits: the half-widths follow from the digits/m);
+    expect(text).toContain("two bodies alone");
+  });
+
+  test.each([
+    [
+      "a file that is not there",
+      ["--elements", "none.json"],
+      /--elements none\.json cannot be read: there is no such file/,
+    ],
+    ["a folder", ["--table", "."], /--table \. cannot be read: it is a directory/],
+    ["an empty file", ["--elements", "empty.json"], /empty\.json: the file is empty/],
+    ["half a file", ["--elements", "half.json"], /half\.json: it is no JSON/],
+    ["two orbits of one name", ["--elements", "twice.json"], /two orbits are called "probe-earth"/],
+    [
+      "an element that is none",
+      ["--elements", "odd.json"],
+      /"periapsisAd" is no element; did you mean "periapsisAt"\?/,
+    ],
+    ["noise for elements", ["--elements", "noise.csv"], /neither JSON nor a CSV/],
+    ["noise for a table", ["--table", "noise.csv"], /has no column tdb/],
+    ["a row that is broken", ["--table", "broken.csv"], /row 100 of the table: zKm is "zero", no number/],
+    ["a body that is none", ["--table", "flight probe.csv", "--about", "erth"], /did you mean "earth"/],
+    ["a body without a table", ["moon-earth", "--about", "earth"], /--about goes with --table/],
+    [
+      "a span outside the table",
+      ["--table", "flight probe.csv", "--next", "3"],
+      /is not wholly covered for flight-probe/,
+    ],
+  ])("refuses %s in one line with status 2", async (_, args, says) => {
+    const span = args.includes("--next") ? ["--from", "2030"] : MARCH;
+    const { status, stdout, stderr } = await apsidary(["passages", ...args, ...span], folder);
+    expect(stdout).toBe("");
+    expect(stderr).toMatch(says);
+    expect(stderr.trimEnd().split("\n")).toHaveLength(1);
+    expect(status).toBe(2);
+  });
+});
