@@ -86,7 +86,7 @@ for (const pair of allPairs()) {
 function meanDistance(pair: Pair, range: RangeFunction): number {
   const sums = { periapsis: [0, 0], apoapsis: [0, 0] };
   const half = Math.max(2 * pair.halfPeriodSeconds, Math.min(CENTURY / 2, 400 * pair.halfPeriodSeconds));
-  const next = scanExtrema(range, { from: MIDDLE - half, to: MIDDLE + half }, pair.sampleSeconds, MIDDLE - half);
+  const next = scanExtrema(range, { from: MIDDLE - half, to: MIDDLE + half }, pair, MIDDLE - half);
   for (let found = next(); found; found = next()) {
     const sum = sums[found.kind];
     sum[0] = (sum[0] ?? 0) + range.distance(found.tdb);
@@ -171,7 +171,7 @@ function passagesAround(pair: Pair, range: RangeFunction, epoch: number): Extrem
   const found: Extremum[] = [];
   for (let i = 0; i < 40; i++) {
     const from = epoch - half + ((2 * i) / 40) * half;
-    const next = scanExtrema(range, { from, to: from + 12 * pair.halfPeriodSeconds }, pair.sampleSeconds, from);
+    const next = scanExtrema(range, { from, to: from + 12 * pair.halfPeriodSeconds }, pair, from);
     for (let j = 0; j < 2; j++) {
       const extremum = next();
       if (extremum) found.push(extremum);

@@ -40,7 +40,7 @@ const SAMPLE_DAYS: Record<Orbiter | "moon" | JupiterMoon, number | readonly [num
   jupiter: 150,
   saturn: 200,
   uranus: 100,
-  neptune: [8, 200],
+  neptune: [16, 200],
   pluto: [100, 200],
   moon: 2.75,
   io: 0.1,

@@ -51,7 +51,7 @@ export function extremumNear(
   const own = supplies.filter(({ source }) => source.id === sourceId);
   for (const supply of [...own, ...supplies]) {
     if (tdb + REACH < supply.span.from || tdb - REACH > supply.span.to) continue;
-    const next = scanExtrema(supply.range, supply.span, pairOf(pair).sampleSeconds, tdb - REACH);
+    const next = scanExtrema(supply.range, supply.span, pairOf(pair), tdb - REACH);
     let nearest = Number.POSITIVE_INFINITY;
     for (let found = next(); found && found.tdb <= tdb + REACH; found = next()) {
       if (found.kind === kind && Math.abs(found.tdb - tdb) < Math.abs(nearest - tdb)) nearest = found.tdb;

@@ -94,6 +94,11 @@ function* passagesBetween(
   const { halfPeriodSeconds: reach } = timeline.pair;
   const covered = timeline.covered.find((span) => span.from <= from && from < span.to);
   if (!covered) return;
+  // Where the span holds no extremum at all, nothing need be ranked: a slow planet is not followed for half its period.
+  const any = timeline.extremaFrom(from, to);
+  let first = any();
+  while (first && first.tdb < from) first = any();
+  if (!first || first.tdb >= to) return;
   const next = timeline.extremaFrom(Math.max(covered.from, from - reach));
   const window: Ranked[] = []; // from `reach` before the extremum that is ranked to `reach` after it
   const measures = new Float64Array(2);

@@ -1,3 +1,4 @@
+import type { Pair } from "../bodies/pair.ts";
 import type { ApsisKind } from "../bodies/term.ts";
 import type { Span } from "../ephemeris/source.ts";
 import { brentMinimum } from "../numeric/brent-minimum.ts";
@@ -31,27 +32,36 @@ const TURN_TOLERANCE = 1;
  *
  * @param range the distance function
  * @param span  where it may be evaluated
- * @param step  seconds from sample to sample, well under a quarter of the shortest interval between extrema
+ * @param pair  the pair, for its seconds from sample to sample (well under a quarter of the shortest interval between extrema) and half
+ *   the width of the last bracket; where that is left out, one that suits the planets and the Moon
  * @param from  where to begin: no extremum at or after it is missed; earlier ones may come first
- * @param tolerance half the width of the last bracket, seconds; left out, one that suits the planets and the Moon
- * @returns a function that gives the next extremum, `null` after the last one in the span
+ * @param until where the search may end: none before it is missed; later ones may follow
+ * @returns a function that gives the next extremum, `null` after the last one
  *
  * Method: R. P. Brent, *Algorithms for Minimization without Derivatives* (1973).
  */
 export function scanExtrema(
   range: RangeFunction,
   span: Span,
-  step: number,
+  pair: Pick<Pair<string>, "sampleSeconds" | "toleranceSeconds">,
   from: number,
-  tolerance?: number,
+  until = Infinity,
 ): () => Extremum | null {
+  const samples = samplesOf(span, pair.sampleSeconds, from);
   return range.givesRate
-    ? scanByRate(range, span, step, from, tolerance ?? ZERO_TOLERANCE)
-    : scanByDistance(range, span, step, from, tolerance ?? MINIMUM_TOLERANCE);
+    ? scanByRate(range, samples, until, pair.toleranceSeconds ?? ZERO_TOLERANCE)
+    : scanByDistance(range, samples, until, pair.toleranceSeconds ?? MINIMUM_TOLERANCE);
+}
+
+interface Samples {
+  readonly startsAtEdge: boolean;
+  readonly first: number;
+  /** Moves to the next sample; `NaN` after the span's end. */
+  next(): number;
 }
 
 /** The samples of a grid inside a span, its two ends included; the first lies up to two steps before `from`, or at the span's start. */
-function samplesOf(span: Span, step: number, from: number) {
+function samplesOf(span: Span, step: number, from: number): Samples {
   let index = Math.floor(Math.max(from, span.from) / step);
   while (index * step <= span.from) index++;
   const startsAtEdge = (index - 1) * step <= span.from;
@@ -59,8 +69,7 @@ function samplesOf(span: Span, step: number, from: number) {
   return {
     startsAtEdge,
     first: at,
-    /** Moves to the next sample; `NaN` after the span's end. */
-    next(): number {
+    next() {
       if (at >= span.to) return Number.NaN;
       at = Math.min(index * step, span.to);
       index++;
@@ -69,15 +78,8 @@ function samplesOf(span: Span, step: number, from: number) {
   };
 }
 
-function scanByRate(
-  range: RangeFunction,
-  span: Span,
-  step: number,
-  from: number,
-  tolerance: number,
-): () => Extremum | null {
+function scanByRate(range: RangeFunction, samples: Samples, until: number, tolerance: number): () => Extremum | null {
   const { rate } = range;
-  const samples = samplesOf(span, step, from);
   // Three samples in a row: a, b, c. Before the span's start the rate counts as infinite, so that a turn at the edge is seen.
   let a = samples.first;
   let b = a;
@@ -95,7 +97,7 @@ function scanByRate(
       pending = null;
       return second;
     }
-    while (!ended) {
+    while (!ended && a <= until) {
       let c = samples.next();
       let fc: number;
       if (Number.isNaN(c)) {
@@ -138,19 +140,17 @@ function scanByRate(
 
 function scanByDistance(
   range: RangeFunction,
-  span: Span,
-  step: number,
-  from: number,
+  samples: Samples,
+  until: number,
   tolerance: number,
 ): () => Extremum | null {
   const { distance } = range;
-  const samples = samplesOf(span, step, from);
   let a = samples.first;
   let fa = distance(a);
   let b = samples.next();
   let fb = Number.isNaN(b) ? fa : distance(b);
   return () => {
-    for (let c = samples.next(); !Number.isNaN(c); c = samples.next()) {
+    for (let c = samples.next(); !Number.isNaN(c) && a <= until; c = samples.next()) {
       const fc = distance(c);
       const low = fb < fa && fb <= fc;
       const high = fb > fa && fb >= fc;

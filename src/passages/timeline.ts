@@ -41,10 +41,11 @@ export interface Timeline {
   supplyAt(tdb: number): Supply | null;
   /**
    * Gives the extrema one after the other within one covered stretch.
-   * @param from where to begin (inside `covered`); no extremum at or after it is missed, earlier ones may come first
-   * @returns a function that gives the next extremum, `null` at the end of the stretch
+   * @param from  where to begin (inside `covered`); no extremum at or after it is missed, earlier ones may come first
+   * @param until where the search may end; none before it is missed
+   * @returns a function that gives the next extremum, `null` at the end
    */
-  extremaFrom(from: number): () => SuppliedExtremum | null;
+  extremaFrom(from: number, until?: number): () => SuppliedExtremum | null;
 }
 
 /**
@@ -82,11 +83,10 @@ export function timelineOf(pair: Pair<string>, sources: readonly Source[]): Time
   const pieces = piecesOf(supplies);
   const covered = coveredBy(pieces);
   const kept = new Map<number, Kept>(); // worked out when a piece is first used
-
   const keptOf = (index: number): Kept => {
     let known = kept.get(index);
     if (!known) {
-      known = { from: seam(pair, pieces, index - 1).rightFrom, until: seam(pair, pieces, index).leftUntil };
+      known = { from: rightFrom(pair, pieces, index - 1), until: leftUntil(pair, pieces, index) };
       kept.set(index, known);
     }
     return known;
@@ -97,23 +97,18 @@ export function timelineOf(pair: Pair<string>, sources: readonly Source[]): Time
     covered,
     supplies,
     supplyAt: (tdb) => pieces.find((piece) => tdb >= piece.from && tdb <= piece.to)?.supply ?? null,
-    extremaFrom(from) {
+    extremaFrom(from, until = Infinity) {
       let index = pieces.findIndex((piece) => from <= piece.to);
       // A passage just after `from` may belong to the piece before it, whose source puts it past the seam.
-      if (index > 0 && joined(pieces, index - 1)) index--;
+      if (index > 0 && from < latestOf(pair, pieces, index - 1)) index--;
       let scan: (() => Extremum | null) | null = null;
       return () => {
         for (; index >= 0 && index < pieces.length; index++, scan = null) {
-          const { supply } = pieces[index] as Piece;
+          const { supply, from: start } = pieces[index] as Piece;
+          if (start - twinReach(pair) > until) return null;
           const keep = keptOf(index);
           if (keep.until > from) {
-            scan ??= scanExtrema(
-              supply.range,
-              supply.span,
-              pair.sampleSeconds,
-              Math.max(from, keep.from),
-              pair.toleranceSeconds,
-            );
+            scan ??= scanExtrema(supply.range, supply.span, pair, Math.max(from, keep.from), until);
             for (let found = scan(); found && found.tdb < keep.until; found = scan()) {
               if (found.tdb >= keep.from) return { kind: found.kind, tdb: found.tdb, supply };
             }
@@ -157,30 +152,52 @@ function coveredBy(pieces: readonly Piece[]): Span[] {
   return covered;
 }
 
-/**
- * Tells how the lists of two neighbouring pieces join: the left one gives its extrema before `leftUntil`, the right one
- * those from `rightFrom` on.
- */
-function seam(pair: Pair<string>, pieces: readonly Piece[], index: number): { leftUntil: number; rightFrom: number } {
+/** How far from a better source's extremum the other source's twin is sought: real sources differ by far less. */
+function twinReach(pair: Pair<string>): number {
+  return pair.halfPeriodSeconds / 2;
+}
+
+/** Whether the left one of two neighbouring pieces has the lesser source, which could have gone on. */
+function leftGoesOn(left: Piece, right: Piece): boolean {
+  return left.supply.span.to > right.from;
+}
+
+/** The end of a piece's list: its extrema before this are kept, those of the next piece follow. */
+function leftUntil(pair: Pair<string>, pieces: readonly Piece[], index: number): number {
   const left = pieces[index];
   const right = pieces[index + 1];
-  if (!left || !right || left.to !== right.from) return { leftUntil: Infinity, rightFrom: -Infinity };
+  if (!left || !right || !joined(pieces, index)) return Infinity;
   const at = right.from;
-  if (left.supply.span.to > at) {
-    // The left source could have gone on: the right one is better and begins here.
-    const first = firstIn(right, pair);
-    const twin = first && nearestOfKind(left.supply, pair, first);
-    if (twin === null || twin <= at) return { leftUntil: twin ?? at, rightFrom: at };
-    const stray = extremaIn(left.supply, pair, at, twin - RESOLUTION);
-    const kept = stray.findIndex((it) => it.tdb - at > reachOf(left.supply, pair, it));
-    return { leftUntil: stray[kept]?.tdb ?? twin, rightFrom: at };
-  }
+  if (!leftGoesOn(left, right)) return at;
+  const first = firstIn(right, pair);
+  const twin = first && nearestOfKind(left.supply, pair, first);
+  if (twin === null || twin <= at) return twin ?? at;
+  const stray = extremaIn(left.supply, pair, at, twin - RESOLUTION);
+  return stray.find((it) => it.tdb - at > strayReach(left.supply, pair, it))?.tdb ?? twin;
+}
+
+/** The beginning of the list of the piece after a seam: its extrema from here on are kept. */
+function rightFrom(pair: Pair<string>, pieces: readonly Piece[], index: number): number {
+  const left = pieces[index];
+  const right = pieces[index + 1];
+  if (!left || !right || !joined(pieces, index)) return -Infinity;
+  const at = right.from;
+  if (leftGoesOn(left, right)) return at;
   const last = lastIn(left, pair);
   const twin = last && nearestOfKind(right.supply, pair, last);
-  if (twin === null || twin >= at) return { leftUntil: at, rightFrom: twin === null ? at : twin + RESOLUTION };
+  if (twin === null || twin >= at) return twin === null ? at : twin + RESOLUTION;
   const stray = extremaIn(right.supply, pair, twin + RESOLUTION, at).reverse();
-  const dropped = stray.find((it) => at - it.tdb > reachOf(right.supply, pair, it));
-  return { leftUntil: at, rightFrom: (dropped?.tdb ?? twin) + RESOLUTION };
+  return (stray.find((it) => at - it.tdb > strayReach(right.supply, pair, it))?.tdb ?? twin) + RESOLUTION;
+}
+
+/** A time by which a piece's own list has surely ended, told without a search of its source. */
+function latestOf(pair: Pair<string>, pieces: readonly Piece[], index: number): number {
+  const left = pieces[index];
+  const right = pieces[index + 1];
+  if (!left || !right || !joined(pieces, index)) return -Infinity;
+  if (!leftGoesOn(left, right)) return right.from;
+  const first = firstIn(right, pair);
+  return first ? first.tdb + twinReach(pair) : right.from;
 }
 
 /**
@@ -189,7 +206,7 @@ function seam(pair: Pair<string>, pieces: readonly Piece[], index: number): { le
  * One that lies deeper in the better source's span without a twin there is the lesser source's own invention, as a slow planet's series
  * makes two extrema where there is none.
  */
-function reachOf(supply: Supply, pair: Pair<string>, { tdb }: Extremum): number {
+function strayReach(supply: Supply, pair: Pair<string>, { tdb }: Extremum): number {
   const measures = new Float64Array(2);
   supply.range.measure(tdb, measures);
   return (3 * supply.source.accuracy(pair, tdb).rangeRateKmS) / Math.abs(measures[1] as number);
@@ -199,7 +216,7 @@ function reachOf(supply: Supply, pair: Pair<string>, { tdb }: Extremum): number 
 const RESOLUTION = 1e-5;
 
 function holdsExtremum(supply: Supply, pair: Pair<string>): boolean {
-  return scanExtrema(supply.range, supply.span, pair.sampleSeconds, supply.span.from, pair.toleranceSeconds)() !== null;
+  return scanExtrema(supply.range, supply.span, pair, supply.span.from)() !== null;
 }
 
 function reachesPast(other: Supply, supply: Supply): boolean {
@@ -207,13 +224,7 @@ function reachesPast(other: Supply, supply: Supply): boolean {
 }
 
 function firstIn(piece: Piece, pair: Pair<string>): Extremum | null {
-  const next = scanExtrema(
-    piece.supply.range,
-    piece.supply.span,
-    pair.sampleSeconds,
-    piece.from,
-    pair.toleranceSeconds,
-  );
+  const next = scanExtrema(piece.supply.range, piece.supply.span, pair, piece.from, piece.to);
   for (let found = next(); found && found.tdb <= piece.to; found = next()) if (found.tdb >= piece.from) return found;
   return null;
 }
@@ -229,15 +240,15 @@ function lastIn(piece: Piece, pair: Pair<string>): Extremum | null {
 
 /** A supply's extrema with `from ≤ t < to`. */
 function extremaIn(supply: Supply, pair: Pair<string>, from: number, to: number): Extremum[] {
-  const next = scanExtrema(supply.range, supply.span, pair.sampleSeconds, from, pair.toleranceSeconds);
+  const next = scanExtrema(supply.range, supply.span, pair, from, to);
   const list: Extremum[] = [];
   for (let found = next(); found && found.tdb < to; found = next()) if (found.tdb >= from) list.push(found);
   return list;
 }
 
-/** The instant of a supply's extremum of the same kind nearest to another source's, within half a period; `null` where there is none. */
+/** The instant of a supply's extremum of the same kind nearest to another source's, within `twinReach`; `null` where there is none. */
 function nearestOfKind(supply: Supply, pair: Pair<string>, twin: Extremum): number | null {
-  const reach = pair.halfPeriodSeconds;
+  const reach = twinReach(pair);
   let nearest: number | null = null;
   for (const { kind, tdb } of extremaIn(supply, pair, twin.tdb - reach, twin.tdb + reach)) {
     if (kind !== twin.kind) continue;

@@ -94,7 +94,7 @@ describe("the engine's half-widths in other centuries", () => {
     let all = 0;
     for (const year of years) {
       const from = (year - 2000) * 365.25 * DAY_SECONDS;
-      const next = scanExtrema(range, { from, to: from + 30 * pair.halfPeriodSeconds }, pair.sampleSeconds, from);
+      const next = scanExtrema(range, { from, to: from + 30 * pair.halfPeriodSeconds }, pair, from);
       for (let i = 0; i < 8; i++) {
         const found = next();
         if (!found) break;

@@ -123,7 +123,7 @@ describe("the engine source", () => {
     // The package blends two integrations over each 80 years, and the stretches meet at an angle.
     const pair = pairOf("pluto-ssb");
     const [span = { from: 0, to: 0 }] = engine.spans(pair);
-    const next = scanExtrema(rangeOf("pluto-ssb"), span, pair.sampleSeconds, span.from);
+    const next = scanExtrema(rangeOf("pluto-ssb"), span, pair, span.from);
     const years: number[] = [];
     for (let found = next(); found; found = next()) years.push(found.tdb / (365.25 * DAY_SECONDS));
     // The sidereal period is 248 years (D. R. Williams' planetary fact sheets, from memory).

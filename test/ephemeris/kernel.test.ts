@@ -188,7 +188,7 @@ describe("a kernel that has come to harm", () => {
     const range = rangeFunction(source.motion(pairOf("emb-sun")), "emb-sun from a.bsp");
     expect(range.rate(20 * DAY)).toBeTypeOf("number");
     const { code, message } = refusal(() => {
-      const next = scanExtrema(range, SPAN, 2 * DAY, 0);
+      const next = scanExtrema(range, SPAN, { sampleSeconds: 2 * DAY }, 0);
       while (next());
     });
     expect(code).toBe("bad-state");

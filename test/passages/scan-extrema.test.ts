@@ -13,7 +13,7 @@ function extrema(
   step: number,
 ): Extremum[] {
   const source = syntheticSource("made", [span], distance, rate);
-  const next = scanExtrema(rangeFunction(source.motion(moon), "made"), span, step, span.from);
+  const next = scanExtrema(rangeFunction(source.motion(moon), "made"), span, { sampleSeconds: step }, span.from);
   const found: Extremum[] = [];
   for (let e = next(); e; e = next()) found.push(e);
   return found;
