@@ -1,3 +1,4 @@
+import { DAY_SECONDS } from "../bodies/constants.ts";
 import type { Pair } from "../bodies/pair.ts";
 import { pointLabel } from "../bodies/point.ts";
 import type { Source, Span } from "../ephemeris/source.ts";
@@ -70,7 +71,7 @@ export function timelineOf(pair: Pair<string>, sources: readonly Source[]): Time
   );
   // A supply too short to hold an extremum cannot be paired at its seams; where another one covers it, that one serves.
   const supplies = all.filter(
-    (supply) => holdsExtremum(supply, pair) || !all.some((other) => reachesPast(other, supply)),
+    (supply) => !all.some((other) => reachesPast(other, supply)) || holdsExtremum(supply, pair),
   );
   if (supplies.length === 0) {
     const asked = sources.length === 1 ? (sources[0] as Source).title : "no source that is open";
@@ -152,10 +153,12 @@ function coveredBy(pieces: readonly Piece[]): Span[] {
   return covered;
 }
 
-/** How far from a better source's extremum the other source's twin is sought: real sources differ by far less. */
+/** How far from a better source's extremum the other source's twin is sought, seconds: real sources differ by less, at most by months for Neptune. */
 function twinReach(pair: Pair<string>): number {
-  return pair.halfPeriodSeconds / 2;
+  return Math.min(pair.halfPeriodSeconds / 2, TWO_YEARS);
 }
+
+const TWO_YEARS = 730 * DAY_SECONDS;
 
 /** Whether the left one of two neighbouring pieces has the lesser source, which could have gone on. */
 function leftGoesOn(left: Piece, right: Piece): boolean {
@@ -216,6 +219,7 @@ function strayReach(supply: Supply, pair: Pair<string>, { tdb }: Extremum): numb
 const RESOLUTION = 1e-5;
 
 function holdsExtremum(supply: Supply, pair: Pair<string>): boolean {
+  if (supply.span.to - supply.span.from > 2 * pair.halfPeriodSeconds) return true;
   return scanExtrema(supply.range, supply.span, pair, supply.span.from)() !== null;
 }
 
