@@ -3,13 +3,18 @@ import { readFile, stat } from "node:fs/promises";
 import { basename, extname } from "node:path";
 import { type BodyName, physicalBody } from "../bodies/physical.ts";
 import { ApsidaryError } from "../error.ts";
+import type { MeanElements } from "../orbit/mean-elements.ts";
+import type { SatelliteTrack } from "../orbit/satellite-track.ts";
 import type { Track } from "../orbit/track.ts";
+import { utcText } from "../time/format-utc.ts";
 import { shown } from "./choice-of.ts";
 
 /** The options that name files of tracks, as given. */
 export interface TrackOptions {
   readonly elements?: string;
   readonly table?: string;
+  readonly omm?: string;
+  readonly tle?: string;
   readonly about?: string;
 }
 
@@ -21,7 +26,7 @@ const MOST_BYTES = 200e6;
  *
  * @throws ApsidaryError `unreadable` for a file that cannot be read; whatever is wrong in it, with its name
  */
-export async function tracksOf({ elements, table, about }: TrackOptions): Promise<Track[]> {
+export async function tracksOf({ elements, table, omm, tle, about }: TrackOptions): Promise<Track[]> {
   if (about !== undefined && table === undefined) {
     throw new ApsidaryError("bad-option", "--about goes with --table; elements name their central body themselves.");
   }
@@ -46,12 +51,53 @@ export async function tracksOf({ elements, table, about }: TrackOptions): Promis
       })),
     );
   }
+  if (omm !== undefined) {
+    tracks.push(
+      ...(await readTracks("--omm", omm, async (text) => {
+        const { parseOmmFile } = await import("../orbit/omm-file.ts");
+        return satellites(parseOmmFile(text));
+      })),
+    );
+  }
+  if (tle !== undefined) {
+    tracks.push(
+      ...(await readTracks("--tle", tle, async (text) => {
+        const { parseTleFile } = await import("../orbit/tle-file.ts");
+        return satellites(parseTleFile(text));
+      })),
+    );
+  }
   const names = new Set<string>();
   for (const { pair } of tracks) {
     if (names.has(pair.name)) throw new ApsidaryError("bad-input", `two tracks are called ${pair.name}; rename one.`);
     names.add(pair.name);
   }
   return tracks;
+}
+
+async function satellites(sets: readonly MeanElements[]): Promise<Track[]> {
+  const { satelliteTrack } = await import("../orbit/satellite-track.ts");
+  const tracks: Track[] = [];
+  for (const set of sets) tracks.push(await satelliteTrack(set));
+  return tracks;
+}
+
+/**
+ * Refuses a span that goes on after a satellite has come down.
+ *
+ * @param tracks as `tracksOf` gave them
+ * @param to     end of the span, TDB seconds past J2000
+ * @throws ApsidaryError `not-covered` with the date
+ */
+export function refuseDecayed(tracks: readonly Track[], to: number): void {
+  for (const track of tracks) {
+    const decay = (track as Partial<SatelliteTrack>).decayTdb ?? null;
+    if (decay === null || to <= decay) continue;
+    throw new ApsidaryError(
+      "not-covered",
+      `${track.pair.name} has decayed: by its elements it comes down on ${utcText(decay, 0)}. Ask for a span that ends before.`,
+    );
+  }
 }
 
 function bodyOf(about: string): BodyName {

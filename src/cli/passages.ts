@@ -24,7 +24,7 @@ export function addPassages(program: Command): void {
     )
     .argument(
       "[pairs...]",
-      "one or more pairs, such as moon-earth,earth-sun; may be left out with --elements or --table",
+      "one or more pairs, such as moon-earth,earth-sun; may be left out where orbits of your own are given",
     )
     .option(
       "--from <when>",
@@ -50,6 +50,7 @@ Examples:
   apsidary passages neptune-sun --from 2040 --to 2055 --rank principal
   apsidary passages moon-earth --from 1066-09-25 --next 2 --calendar julian
   apsidary passages --elements probe.json --from 2027 --to 2028
+  apsidary passages --tle satellites.txt --from 2027-03-01 --next 20
   apsidary passages --table flight.csv --about earth --from 2027-03-01 --to 2027-03-04
   apsidary passages moon-earth --from 2027 --to 2047 --format csv --out moon.csv`,
     )
@@ -65,6 +66,11 @@ function addTrackOptions(command: Command): Command {
       "--elements <file>",
       "orbits of your own: osculating elements as JSON or CSV (docs/orbits.md has the layout)",
     )
+    .option(
+      "--omm <file>",
+      "satellites: orbit mean-elements messages as XML, KEY = VALUE or JSON; needs the package satellite.js",
+    )
+    .option("--tle <file>", "satellites: two-line elements; needs the package satellite.js")
     .option("--table <file>", "a table of states of your own, as CSV; the pair is called after the file")
     .option("--about <body>", "the body at the centre of --table: heights are above its radius");
 }

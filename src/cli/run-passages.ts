@@ -13,7 +13,7 @@ import { choiceOf, shown } from "./choice-of.ts";
 import { edgeOf, requireOrder, tellingCalendar } from "./edge.ts";
 import { openFor } from "./open-for.ts";
 import { type Calendar, calendarOf, formatOf, JULIAN_TITLE, sourceChoiceOf } from "./options.ts";
-import { tracksOf } from "./orbit-tracks.ts";
+import { refuseDecayed, tracksOf } from "./orbit-tracks.ts";
 import { pairsOf } from "./pairs.ts";
 import type { PassagesOptions } from "./passages.ts";
 import { type ListedPassage, passagesReport } from "./passages-report.ts";
@@ -70,6 +70,7 @@ export async function runPassages(words: readonly string[], options: PassagesOpt
       ? edge("--to", options.to)
       : tellingCalendar(calendar, () => endOfNext(ephemeris, pairs, from, count, what));
   requireOrder(from, to, options);
+  refuseDecayed(tracks, to);
   const span = { from: { tdbSeconds: from }, to: { tdbSeconds: to } };
   const found = tellingCalendar(calendar, () => mergedPassages(ephemeris, pairs, { ...span, ...what }));
   const made = await provenanceOf(ephemeris, { pairs, span: { from, to }, source });
@@ -89,11 +90,11 @@ export async function runPassages(words: readonly string[], options: PassagesOpt
 }
 
 /** Asks for a pair where neither a pair nor a track is named. @throws ApsidaryError `bad-input` */
-function requirePairs(words: readonly string[], { elements, table }: PassagesOptions): void {
-  if (words.length > 0 || elements !== undefined || table !== undefined) return;
+function requirePairs(words: readonly string[], { elements, table, omm, tle }: PassagesOptions): void {
+  if (words.length > 0 || [elements, table, omm, tle].some((file) => file !== undefined)) return;
   throw new ApsidaryError(
     "bad-input",
-    "the argument <pairs> is missing; name a pair such as moon-earth, or give --elements or --table. See: apsidary passages --help",
+    "the argument <pairs> is missing; name a pair such as moon-earth, or give --elements, --omm, --tle or --table. See: apsidary passages --help",
   );
 }
 

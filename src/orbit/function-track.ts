@@ -4,6 +4,7 @@ import type { Accuracy, Motion, Span } from "../ephemeris/source.ts";
 import { ApsidaryError } from "../error.ts";
 import { formatTdb } from "../time/format-tdb.ts";
 import { checkMotion } from "./check-motion.ts";
+import { differencedMotion } from "./differenced-motion.ts";
 import { centreOf, type Track, trackOf } from "./track.ts";
 
 /** A motion that a caller gives as a function of time. */
@@ -57,12 +58,12 @@ export function functionTrack({ name, state, span, periodSeconds, about, accurac
   const length = guarded(span.from, new Float64Array(6));
   const given: Motion = { givesVelocity: length === 6, state: (tdb, out) => void guarded(tdb, out) };
   // differences need room on either side
-  const inner: Span = { from: span.from + 3 * step, to: span.to - 3 * step };
+  const inner: Span = { from: span.from + 22 * step, to: span.to - 22 * step };
   if (!(inner.from < inner.to)) {
     throw new ApsidaryError("bad-span", `the span of ${name} is shorter than its search needs; give a longer one.`);
   }
   checkMotion(name, given, span, pair.sampleSeconds, accuracy?.rangeRateKmS ?? 0);
-  const motion = length === 6 ? withAcceleration(given, step) : withVelocity(given, step);
+  const motion = length === 6 ? withAcceleration(given, step) : differencedMotion(given, step);
   const place = new Float64Array(9);
   const title = `a function of time for ${name}`;
   return trackOf({
@@ -123,35 +124,6 @@ function withAcceleration(given: Motion, step: number): Motion {
       given.state(tdb + step, after);
       given.state(tdb, out);
       for (let i = 0; i < 3; i++) out[6 + i] = ((after[3 + i] as number) - (before[3 + i] as number)) / (2 * step);
-    },
-  };
-}
-
-function withVelocity(given: Motion, step: number): Motion {
-  const [a, b, c, d] = [new Float64Array(6), new Float64Array(6), new Float64Array(6), new Float64Array(6)];
-  const around = (tdb: number, out: Float64Array): void => {
-    given.state(tdb - 2 * step, a);
-    given.state(tdb - step, b);
-    given.state(tdb + step, c);
-    given.state(tdb + 2 * step, d);
-    given.state(tdb, out);
-    for (let i = 0; i < 3; i++) {
-      out[3 + i] = (8 * ((c[i] as number) - (b[i] as number)) - ((d[i] as number) - (a[i] as number))) / (12 * step);
-    }
-  };
-  // a second difference over so small a step is all rounding: the acceleration takes a step twenty times as wide
-  const wide = 20 * step;
-  const [before, after] = [new Float64Array(6), new Float64Array(6)];
-  return {
-    givesVelocity: true,
-    state: around,
-    stateAndAcceleration(tdb, out) {
-      given.state(tdb - wide, before);
-      given.state(tdb + wide, after);
-      around(tdb, out);
-      for (let i = 0; i < 3; i++) {
-        out[6 + i] = ((after[i] as number) - 2 * (out[i] as number) + (before[i] as number)) / (wide * wide);
-      }
     },
   };
 }

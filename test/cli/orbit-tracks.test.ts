@@ -6,6 +6,7 @@ import { Ajv2020 } from "ajv/dist/2020.js";
 import addFormats from "ajv-formats";
 import { afterAll, beforeAll, describe, expect, test } from "vitest";
 import { elementsTrack } from "../../src/orbit/elements-track.ts";
+import { asLines, asXml, DECAYING, MESSAGE, VERIFICATION } from "../orbit/satellites.ts";
 import { apsidary } from "./command.ts";
 
 const PROBE = {
@@ -54,6 +55,14 @@ beforeAll(() => {
     "broken.csv",
     table.replace(/(.*\n){100}/, (head) => `${head}857294400,1e5,0,zero,0,0,0\n`),
   );
+  file("satellites.txt", VERIFICATION);
+  file("one.txt", VERIFICATION.split("\n").slice(0, 2).join("\r\n"));
+  file("decaying.txt", DECAYING);
+  file("changed.txt", VERIFICATION.replace("34.2682", "34.2683"));
+  file("probe.xml", asXml());
+  file("probe.kvn", asLines());
+  file("message.json", JSON.stringify([MESSAGE]));
+  file("other.xml", asXml({ ...MESSAGE, CENTER_NAME: "MARS" }));
   file("empty.json", "");
   file("half.json", '[{"name": "probe-earth", ');
   file("twice.json", JSON.stringify([PROBE, PROBE]));
@@ -134,6 +143,27 @@ describe("apsidary passages, of tracks", () => {
     });
   });
 
+  test("lists a satellite's passages from the three forms of its message alike, two perigees a day", async () => {
+    const rowsOf = async (file: string) => {
+      const { rows } = JSON.parse(await answer("--omm", file, ...MARCH, "--kind", "periapsis", "--format", "json"));
+      return rows.map((row: object) => ({ ...row, source: "" }));
+    };
+    const rows = await rowsOf("probe.xml");
+    expect(rows).toHaveLength(6);
+    expect(rows[0]).toMatchObject({ pair: "PROBE-ONE-earth", term: "perigee", accuracyBasis: "assumed" });
+    expect(await rowsOf("probe.kvn")).toEqual(rows);
+    expect(await rowsOf("message.json")).toEqual(rows);
+  });
+
+  test("lists the passages of several satellites from two-line elements", async () => {
+    const span = ["--from", "2006-06-25", "--to", "2006-06-26"];
+    const { status, stderr } = await apsidary(["passages", "--tle", "satellites.txt", ...span], folder);
+    expect(stderr).toMatch(/not wholly covered for 00005-earth/); // its epoch is six years before the others'
+    expect(status).toBe(2);
+    const text = await answer("--tle", "one.txt", "--from", "2000-06-28", "--next", "2");
+    expect(text).toMatch(/00005-earth {2}apogee .*user:one\.txt/);
+  });
+
   test("prints heights, and says when the half-widths stand on digits alone", async () => {
     const text = await answer("--elements", "probe.json", ...MARCH);
     expect(text).toMatch(/probe-earth {2}perigee +29 514\.92 {2}± 0\.05 +23 136\.78 {2}user:probe\.json$/m);
@@ -159,6 +189,15 @@ describe("apsidary passages, of tracks", () => {
     ["noise for elements", ["--elements", "noise.csv"], /neither JSON nor a CSV/],
     ["noise for a table", ["--table", "noise.csv"], /has no column tdb/],
     ["a row that is broken", ["--table", "broken.csv"], /row 100 of the table: zKm is "zero", no number/],
+    [
+      "a satellite that has decayed",
+      ["--tle", "decaying.txt"],
+      /28872-earth has decayed: .* comes down on 2005-11-29T01:/,
+    ],
+    ["elements that were changed", ["--tle", "changed.txt"], /line 2: its checksum is 7/],
+    ["noise for two-line elements", ["--tle", "noise.csv"], /noise\.csv: /],
+    ["noise for a message", ["--omm", "noise.csv"], /noise\.csv: /],
+    ["a message of another centre", ["--omm", "other.xml"], /CENTER_NAME is "MARS"/],
     ["a body that is none", ["--table", "flight probe.csv", "--about", "erth"], /did you mean "earth"/],
     ["a body without a table", ["moon-earth", "--about", "earth"], /--about goes with --table/],
     [
