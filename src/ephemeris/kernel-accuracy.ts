@@ -6,24 +6,26 @@ import type { Accuracy, AccuracyBasis } from "./source.ts";
 /**
  * How far the built-in kernel may be from the truth about the Sun's centre (the Moon: about the Earth's).
  *
- * `seconds` is what passages differ by between kindred ephemerides: the larger of DE405 against DE200 and DE405 against
- * an ephemeris made from DE431, where DE200 is the older by twenty years of data and, for the outer planets, set aside
- * (it knew no Voyager ranging past Saturn); measured over 1960–2059. `acceleration`, km/d², is the median range acceleration at DE405's
- * passages (Neptune, whose five differ tenfold: between the least and the median): their product is the range-rate error that passages inherit. `km` is the distance's own. These are bounds
- * between kindred ephemerides, not samples of a law; the refit of the built-in kernel (up to 0.1 s, Neptune 1.1 s, 1 m) lies inside.
+ * `seconds` is the most by which passages of 1960–2059 differ between kindred ephemerides: DE405 against DE200 (Debian's
+ * `casacore-data-jpl-de200`; twenty years of data less) or against an ephemeris made from DE431, whichever is more; for Uranus and
+ * beyond DE200 is set aside, which was made before Voyager 2 passed there. `acceleration`, km/d², is the median range
+ * acceleration at DE405's passages (Neptune, whose five differ tenfold: between the least and the median); the product of the
+ * two is the range-rate error that passages inherit. `km` is the most by which the distances there differ between DE405 and DE200; for Uranus and
+ * beyond twice the range-rate error over the mean motion. These are bounds between kindred ephemerides, not samples of a law; the
+ * refit of the built-in kernel (up to 0.1 s, Neptune 1.1 s, and 0.7 m) lies inside them.
  */
 const ABOUT_SUN: Record<string, { seconds: number; acceleration: number; km: number }> = {
-  earth: { seconds: 1, acceleration: 790, km: 0.3 },
-  emb: { seconds: 0.6, acceleration: 760, km: 0.3 },
-  moon: { seconds: 2, acceleration: 1190, km: 0.02 },
-  mercury: { seconds: 0.2, acceleration: 41_800, km: 1 },
-  venus: { seconds: 0.3, acceleration: 570, km: 0.5 },
-  mars: { seconds: 0.5, acceleration: 2160, km: 1 },
-  jupiter: { seconds: 150, acceleration: 86, km: 30 },
-  saturn: { seconds: 470, acceleration: 29, km: 150 },
-  uranus: { seconds: 1500, acceleration: 5.7, km: 500 },
-  neptune: { seconds: 23_400, acceleration: 0.4, km: 3000 },
-  pluto: { seconds: 4200, acceleration: 13, km: 3000 },
+  earth: { seconds: 1, acceleration: 790, km: 0.06 },
+  emb: { seconds: 0.6, acceleration: 760, km: 0.06 },
+  moon: { seconds: 2, acceleration: 1190, km: 0.007 },
+  mercury: { seconds: 0.25, acceleration: 41_800, km: 0.07 },
+  venus: { seconds: 0.3, acceleration: 570, km: 0.25 },
+  mars: { seconds: 0.5, acceleration: 2160, km: 0.6 },
+  jupiter: { seconds: 150, acceleration: 86, km: 50 },
+  saturn: { seconds: 470, acceleration: 29, km: 600 },
+  uranus: { seconds: 1500, acceleration: 5.7, km: 1000 },
+  neptune: { seconds: 23_400, acceleration: 0.4, km: 2100 },
+  pluto: { seconds: 4200, acceleration: 13, km: 18_000 },
 };
 
 /**
