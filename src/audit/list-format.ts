@@ -3,7 +3,7 @@ import { readKind } from "./read-kind.ts";
 import { splitCells } from "./split-cells.ts";
 
 /** How the rows of a list are laid out. */
-export type ListFormat = "csv" | "tsv" | "semicolons" | "json" | "text";
+export type ListFormat = "csv" | "tsv" | "semicolons" | "json" | "text" | "events" | "markup";
 
 /** The separator of a format's cells, as `splitCells` takes it. */
 export const SEPARATORS: Readonly<Record<ListFormat, string>> = {
@@ -12,6 +12,8 @@ export const SEPARATORS: Readonly<Record<ListFormat, string>> = {
   semicolons: ";",
   json: ",",
   text: "  ",
+  events: "  ",
+  markup: "  ",
 };
 
 /**
@@ -24,6 +26,8 @@ export const SEPARATORS: Readonly<Record<ListFormat, string>> = {
 export function listFormat(beginning: string): ListFormat {
   const text = beginning.replace(/^(?:\ufeff|\u00ef\u00bb\u00bf)/, "").trimStart();
   if (/^[[{]/.test(text)) return "json";
+  if (/^BEGIN:VCALENDAR\b/i.test(text)) return "events";
+  if (/^<(?:!doctype|html|table|\?xml)\b/i.test(text) || text.startsWith("<?xml")) return "markup";
   const lines = text
     .split(/\r\n|\n|\r/)
     .slice(0, 60)

@@ -24,8 +24,8 @@ export const ROW_SHARES: Readonly<Partial<Record<CauseName, number>>> = Object.f
   "year-copied": 0.08,
   "month-day-swapped": 0.05,
   "julian-calendar": 0.02,
-  "light-time": 0.03,
-  "coarse-model": 0.06,
+  "light-time": 0.04,
+  "coarse-model": 0.1,
 });
 export const CHANCE_SHARE = 0.2;
 

@@ -105,7 +105,7 @@ function readOne(
   const pair =
     pairText !== ""
       ? readPair(pairText)
-      : (settings.pair ?? impliedPair(named?.about ?? aboutOf(columns, kindOfColumns)) ?? bodyIn(kindText));
+      : (settings.pair ?? bodyIn(kindText) ?? impliedPair(named?.about ?? aboutOf(columns, kindOfColumns)));
   if (!pair) {
     const near = pairText === "" ? null : nearPair(pairText);
     return unread(

@@ -5,10 +5,12 @@ import { decoded } from "./decoded.ts";
 import { type ListFormat, listFormat, SEPARATORS } from "./list-format.ts";
 import type { ListRow, ReadRecord, UnreadRow } from "./list-row.ts";
 import { type ReadSettings, readCells } from "./read-cells.ts";
+import { eventReader } from "./read-events.ts";
 import { type ColumnRole, readHeading } from "./read-header.ts";
 import { readJsonRow } from "./read-json-row.ts";
 import { readKind } from "./read-kind.ts";
 import { readLooseLine } from "./read-loose-line.ts";
+import { markupReader } from "./read-markup.ts";
 import { readPair } from "./read-pair.ts";
 import { splitCells } from "./split-cells.ts";
 import { splitObjects } from "./split-objects.ts";
@@ -29,7 +31,7 @@ const BEGINNING = 8192;
 const UNIT_SECONDS = { second: 1, minute: 60, hour: 3600, day: 86_400 } as const;
 
 /**
- * Reads a list: CSV, TSV, semicolons, JSON, a JSON object a line, or loose columns of text; told apart by its beginning.
+ * Reads a list: CSV, TSV, semicolons, JSON, a JSON object a line, loose columns of text, a calendar file or a page; told apart by its beginning.
  *
  * @param chunks  text, each character a byte (Latin-1); what is not ASCII is taken for UTF-8 where it is valid, else for Latin-1
  * @param reading what the list leaves unsaid
@@ -53,6 +55,11 @@ export async function* readList(
     return;
   }
   settings.dayFirst = dateOrder(beginning);
+  if (format === "events" || format === "markup") {
+    const readLine = format === "events" ? eventReader(settings) : markupReader(settings);
+    for await (const block of splitRecords(all, () => false)) yield block.map(readLine);
+    return;
+  }
   const read = lineReader(format, settings, hasHeading(beginning, format));
   for await (const block of splitRecords(all, () => format !== "text")) yield block.map(read);
 }

@@ -63,6 +63,12 @@ export function readWhen(given: string, context: WhenContext = {}): PublishedWhe
   const text = given.trim();
   const iso = ISO.exec(text);
   if (iso) return ofIso(text, iso);
+  const weekday = /^(?:mon|tue|wed|thu|fri|sat|sun)[a-z]*[.,]?\s+(?=\d|[a-z])/i.exec(text)?.[0];
+  if (weekday !== undefined) {
+    // the day of the week would have to change with the date, so the text is not imitated
+    const read = readWhen(text.slice(weekday.length), context);
+    return isUnread(read) ? read : { ...read, text, style: null };
+  }
   if (text.length > 80) return { problem: `"${text.slice(0, 30)}…" is too long for a time` };
   return ofLoose(text, context);
 }

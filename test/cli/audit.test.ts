@@ -96,7 +96,7 @@ describe("apsidary audit", () => {
   });
 
   test("agrees wholly with a calendar that this program prints, in a zone", async () => {
-    for (const format of ["text", "json"]) {
+    for (const format of ["text", "json", "ics", "html"]) {
       const args = ["calendar", "2027", "--zone", "Pacific/Auckland", "--format", format, "--out", "calendar"];
       await apsidary(args, folder);
       const { status, stdout } = await run("calendar", "--zone", "Pacific/Auckland", "--format", "json");
