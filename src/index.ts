@@ -1,3 +1,4 @@
+export * from "./audit/index.ts";
 export { AU_KM } from "./bodies/constants.ts";
 export { allPairs, type Pair, type PairName, pairOf } from "./bodies/pair.ts";
 export { type ApsisKind, type ApsisRank, termOf } from "./bodies/term.ts";

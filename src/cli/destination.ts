@@ -8,7 +8,7 @@ import { shown } from "./choice-of.ts";
 /** Where an answer goes. */
 export interface Destination {
   /** Writes a piece, and waits where the reader is slower. */
-  write(text: string): Promise<void>;
+  write(text: string | Uint8Array): Promise<void>;
   /** Ends the answer; a file appears under its name only now. */
   finish(): Promise<void>;
   /** Gives the answer up; nothing of a file remains. */

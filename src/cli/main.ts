@@ -4,7 +4,8 @@ import { shown } from "./choice-of.ts";
 import { tellFailure } from "./failure.ts";
 import { makeProgram } from "./program.ts";
 
-process.exitCode = await main(process.argv.slice(2));
+// A command may have set a status of its own: `audit` tells of rows that do not agree.
+process.exitCode = (await main(process.argv.slice(2))) || (process.exitCode ?? 0);
 
 /** Runs the command. @param words the arguments after its name @returns the exit status */
 async function main(words: readonly string[]): Promise<number> {

@@ -92,19 +92,12 @@ export async function runAudit(file: string, options: AuditCommandOptions): Prom
     }
     await mended?.finish();
     await destination.finish();
-    if (count > end.summary.agrees + end.summary.undecided) setStatus();
+    if (count > end.summary.agrees + end.summary.undecided) process.exitCode = SOME_WRONG;
   } catch (error) {
     await mended?.abandon();
     await destination.abandon();
     if (!(error instanceof ReaderGone)) throw error;
   }
-}
-
-/** The run's own status is set when it is over, so that this comes after. */
-function setStatus(): void {
-  process.once("beforeExit", () => {
-    process.exitCode ||= SOME_WRONG;
-  });
 }
 
 function readingOf(options: AuditCommandOptions): AuditOptions {
@@ -175,7 +168,7 @@ function csvRows(rows: readonly AuditRow[], first: boolean): string {
 }
 
 /** The records with their cells mended. A destination takes bytes as well as text, and these need not be UTF-8. */
-function bytesOf(records: readonly AuditedRecord[]): string {
+function bytesOf(records: readonly AuditedRecord[]): Uint8Array {
   const text = records
     .map(({ record, rows }) =>
       mendedRecord(
@@ -184,7 +177,7 @@ function bytesOf(records: readonly AuditedRecord[]): string {
       ),
     )
     .join("");
-  return Buffer.from(text, "latin1") as unknown as string;
+  return Buffer.from(text, "latin1");
 }
 
 function progressOf(shownToUser: boolean): { tell(rows: number): void; end(): void } {
