@@ -15,6 +15,7 @@ export interface TrackOptions {
   readonly table?: string;
   readonly omm?: string;
   readonly tle?: string;
+  readonly star?: string;
   readonly about?: string;
 }
 
@@ -26,7 +27,7 @@ const MOST_BYTES = 200e6;
  *
  * @throws ApsidaryError `unreadable` for a file that cannot be read; whatever is wrong in it, with its name
  */
-export async function tracksOf({ elements, table, omm, tle, about }: TrackOptions): Promise<Track[]> {
+export async function tracksOf({ elements, table, omm, tle, star, about }: TrackOptions): Promise<Track[]> {
   if (about !== undefined && table === undefined) {
     throw new ApsidaryError("bad-option", "--about goes with --table; elements name their central body themselves.");
   }
@@ -64,6 +65,15 @@ export async function tracksOf({ elements, table, omm, tle, about }: TrackOption
       ...(await readTracks("--tle", tle, async (text) => {
         const { parseTleFile } = await import("../orbit/tle-file.ts");
         return satellites(parseTleFile(text));
+      })),
+    );
+  }
+  if (star !== undefined) {
+    tracks.push(
+      ...(await readTracks("--star", star, async (text) => {
+        const { parseStarFile } = await import("../orbit/star-file.ts");
+        const { starTrack } = await import("../orbit/star-track.ts");
+        return parseStarFile(text).map((given) => starTrack(given));
       })),
     );
   }

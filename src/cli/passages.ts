@@ -71,6 +71,7 @@ function addTrackOptions(command: Command): Command {
       "satellites: orbit mean-elements messages as XML, KEY = VALUE or JSON; needs the package satellite.js",
     )
     .option("--tle <file>", "satellites: two-line elements; needs the package satellite.js")
+    .option("--star <file>", "binary stars: the elements of their orbits as JSON")
     .option("--table <file>", "a table of states of your own, as CSV; the pair is called after the file")
     .option("--about <body>", "the body at the centre of --table: heights are above its radius");
 }

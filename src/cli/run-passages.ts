@@ -90,11 +90,11 @@ export async function runPassages(words: readonly string[], options: PassagesOpt
 }
 
 /** Asks for a pair where neither a pair nor a track is named. @throws ApsidaryError `bad-input` */
-function requirePairs(words: readonly string[], { elements, table, omm, tle }: PassagesOptions): void {
-  if (words.length > 0 || [elements, table, omm, tle].some((file) => file !== undefined)) return;
+function requirePairs(words: readonly string[], { elements, table, omm, tle, star }: PassagesOptions): void {
+  if (words.length > 0 || [elements, table, omm, tle, star].some((file) => file !== undefined)) return;
   throw new ApsidaryError(
     "bad-input",
-    "the argument <pairs> is missing; name a pair such as moon-earth, or give --elements, --omm, --tle or --table. See: apsidary passages --help",
+    "the argument <pairs> is missing; name a pair such as moon-earth, or give --elements, --omm, --tle, --star or --table. See: apsidary passages --help",
   );
 }
 

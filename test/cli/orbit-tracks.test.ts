@@ -18,6 +18,16 @@ const PROBE = {
   uncertainty: { semiMajorAxisKm: 0.005, eccentricity: 1e-6, periapsisAt: 2 },
 } as const;
 
+const BINARY = {
+  name: "star-b-star-a",
+  periastronAt: "JD 2455000.25",
+  periodDays: 1000.2,
+  eccentricity: 0.61,
+  argumentDeg: 65.1,
+  k1KmS: 20.3,
+  sigma: { periastronAt: 0.8, periodDays: 0.05, eccentricity: 0.004, k1KmS: 0.2, argumentDeg: 1.1 },
+};
+
 let folder: string;
 beforeAll(() => {
   folder = mkdtempSync(join(tmpdir(), "apsidary-tracks-"));
@@ -63,6 +73,7 @@ beforeAll(() => {
   file("probe.kvn", asLines());
   file("message.json", JSON.stringify([MESSAGE]));
   file("other.xml", asXml({ ...MESSAGE, CENTER_NAME: "MARS" }));
+  file("binary.json", JSON.stringify(BINARY));
   file("empty.json", "");
   file("half.json", '[{"name": "probe-earth", ');
   file("twice.json", JSON.stringify([PROBE, PROBE]));
@@ -164,6 +175,21 @@ describe("apsidary passages, of tracks", () => {
     expect(text).toMatch(/00005-earth {2}apogee .*user:one\.txt/);
   });
 
+  test("lists a binary star's periastra, each less sure than the one before, and no heights", async () => {
+    const text = await answer("--star", "binary.json", "--from", "2027", "--to", "2040", "--format", "json");
+    const { made, rows } = JSON.parse(text);
+    validate({ made, rows, schema: "apsidary/passages/1" });
+    expect(validate.errors).toBeNull();
+    const periastra = rows.filter((row: { kind: string }) => row.kind === "periapsis");
+    expect(periastra.length).toBeGreaterThan(3);
+    for (const row of periastra) {
+      const k = Math.round((row.tdbSeconds / 86400 - 3455.25) / 1000.2);
+      expect(row.tdbSeconds).toBeCloseTo((3455.25 + k * 1000.2) * 86400, 0);
+      expect(row.timeUncertaintySeconds).toBeCloseTo(1.96 * 86400 * Math.hypot(0.8, 0.05 * k), 0);
+      expect(row).toMatchObject({ heightKm: null, targetPoint: null, centrePoint: null, accuracyBasis: "user" });
+    }
+  });
+
   test("prints heights, and says when the half-widths stand on digits alone", async () => {
     const text = await answer("--elements", "probe.json", ...MARCH);
     expect(text).toMatch(/probe-earth {2}perigee +29 514\.92 {2}± 0\.05 +23 136\.78 {2}user:probe\.json$/m);
@@ -198,6 +224,8 @@ describe("apsidary passages, of tracks", () => {
     ["noise for two-line elements", ["--tle", "noise.csv"], /noise\.csv: /],
     ["noise for a message", ["--omm", "noise.csv"], /noise\.csv: /],
     ["a message of another centre", ["--omm", "other.xml"], /CENTER_NAME is "MARS"/],
+    ["a star that is none", ["--star", "probe.json"], /"about" is no element of a star/],
+    ["noise for a star", ["--star", "noise.csv"], /noise\.csv: it is no JSON/],
     ["a body that is none", ["--table", "flight probe.csv", "--about", "erth"], /did you mean "earth"/],
     ["a body without a table", ["moon-earth", "--about", "earth"], /--about goes with --table/],
     [
