@@ -1,6 +1,6 @@
 import { escaped } from "../report/chart-element.ts";
 import { groupedNumber } from "../report/grouped-number.ts";
-import { missingLine } from "./audit-report.ts";
+import { missingLine, VERDICT_WORDS } from "./audit-report.ts";
 import type { AuditRow, Verdict } from "./audit-row.ts";
 import type { AuditEnd } from "./auditor.ts";
 import { residualChart } from "./residual-chart.ts";
@@ -57,7 +57,7 @@ ${STYLE}
 <body>
 <h1>Audit of ${escaped(title)}</h1>
 <p class="lead">${escaped(end.list.sentence)}</p>
-<p>${counts.map(([verdict, count]) => `${groupedNumber(count, 0)} ${verdict}`).join(", ")}.</p>
+<p>${counts.map(([verdict, count]) => `${groupedNumber(count, 0)} ${VERDICT_WORDS[verdict]}`).join(", ")}.</p>
 ${chart}
 ${rows.toMend.length === 0 ? "<p>No row needs mending.</p>" : `<h2>Rows to mend</h2>\n<div class="table"><table>\n<thead><tr><th>line</th><th>published</th><th>passage</th><th>verdict</th><th>what to do</th></tr></thead>\n<tbody>\n${cells.join("\n")}\n</tbody>\n</table></div>`}
 ${list("Missing from the list", end.missing.slice(0, 200).map(missingLine))}

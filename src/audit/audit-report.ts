@@ -11,7 +11,8 @@ import type { AuditEnd } from "./auditor.ts";
 /** Rows, missing passages and duplicates that a report shows; the rest is counted. */
 export const MOST_SHOWN = 1000;
 
-const WORDS: Readonly<Record<Verdict, string>> = {
+/** The verdicts as a count of rows says them. */
+export const VERDICT_WORDS: Readonly<Record<Verdict, string>> = {
   agrees: "agree",
   undecided: "cannot be decided",
   "last-digit": "off in the last digit",
@@ -47,7 +48,7 @@ export function* auditReport(
 ): Generator<string, void, undefined> {
   const counts = (Object.keys(WORDS) as Verdict[]).filter((verdict) => end.summary[verdict] > 0);
   const total = counts.reduce((sum, verdict) => sum + end.summary[verdict], 0);
-  const parts = counts.map((verdict) => `${groupedNumber(end.summary[verdict], 0)} ${WORDS[verdict]}`);
+  const parts = counts.map((verdict) => `${groupedNumber(end.summary[verdict], 0)} ${VERDICT_WORDS[verdict]}`);
   yield wrapped(`${title}: ${end.list.sentence}`);
   yield wrapped(`${groupedNumber(total, 0)} row${total === 1 ? "" : "s"}: ${parts.join(", ")}.`);
   if (end.list.cause !== null) {

@@ -377,9 +377,9 @@ function sentenceOf(
   rightWhen: string,
   rightDistance: string,
 ): string {
-  const said = [timeSaid(row, one, time, rightWhen)];
-  if (distance && distance.verdict !== "agrees") said.push(distanceSaid(row, one, distance, rightDistance));
-  return said.join(" ");
+  const said = timeSaid(row, one, time, rightWhen);
+  if (!distance || distance.verdict === "agrees") return said;
+  return `${said.replace(/^Agrees/, "The time agrees")} ${distanceSaid(row, one, distance, rightDistance)}`;
 }
 
 function timeSaid(row: ListRow, one: Case, time: TimeJudgement, right: string): string {
