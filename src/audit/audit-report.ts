@@ -46,7 +46,7 @@ export function* auditReport(
   toMend: readonly AuditRow[],
   end: AuditEnd,
 ): Generator<string, void, undefined> {
-  const counts = (Object.keys(WORDS) as Verdict[]).filter((verdict) => end.summary[verdict] > 0);
+  const counts = (Object.keys(VERDICT_WORDS) as Verdict[]).filter((verdict) => end.summary[verdict] > 0);
   const total = counts.reduce((sum, verdict) => sum + end.summary[verdict], 0);
   const parts = counts.map((verdict) => `${groupedNumber(end.summary[verdict], 0)} ${VERDICT_WORDS[verdict]}`);
   yield wrapped(`${title}: ${end.list.sentence}`);
