@@ -1,3 +1,4 @@
+import { PASSAGE_FIELDS } from "../passages/passage-fields.ts";
 import type { PassageRow } from "../passages/to-row.ts";
 import type { PrintedUnit } from "../report/printed-unit.ts";
 
@@ -66,25 +67,7 @@ export interface CalendarRow extends PassageRow {
 
 /** The fields of a row, in order: the header of its CSV. */
 export const CALENDAR_FIELDS = [
-  "pair",
-  "targetPoint",
-  "centrePoint",
-  "kind",
-  "term",
-  "rank",
-  "existence",
-  "tdbSeconds",
-  "tdb",
-  "utc",
-  "utcBasis",
-  "distanceKm",
-  "distanceAu",
-  "timeUncertaintySeconds",
-  "distanceUncertaintyKm",
-  "utcUncertaintySeconds",
-  "rangeAccelerationKmPerDay2",
-  "source",
-  "accuracyBasis",
+  ...PASSAGE_FIELDS,
   "local",
   "printed",
   "printedUnit",

@@ -1,6 +1,7 @@
 import type { Pair } from "../bodies/pair.ts";
 import { type PointId, pointLabel } from "../bodies/point.ts";
 import { ApsidaryError } from "../error.ts";
+import { sha256 } from "./sha256.ts";
 import type { Accuracy, Motion, Source, Span } from "./source.ts";
 import { addSegmentState, readSpk, type SpkSegment } from "./spk.ts";
 
@@ -198,9 +199,4 @@ function motionAlong(steps: readonly Step[]): Motion {
     state: (tdb, out) => fill(tdb, out, 1),
     stateAndAcceleration: (tdb, out) => fill(tdb, out, 2),
   };
-}
-
-async function sha256(bytes: Uint8Array): Promise<string> {
-  const digest = await globalThis.crypto.subtle.digest("SHA-256", bytes as Uint8Array<ArrayBuffer>);
-  return [...new Uint8Array(digest)].map((byte) => byte.toString(16).padStart(2, "0")).join("");
 }

@@ -8,6 +8,7 @@ import { moonFromEarth } from "./series-moon.ts";
 import { planetFromSun } from "./series-planet.ts";
 import type { StateWriter } from "./series-spherical.ts";
 import { sunFromBarycentre } from "./series-sun.ts";
+import { sha256 } from "./sha256.ts";
 import type { Motion, Source, Span } from "./source.ts";
 
 /** The bytes of the two files of series. */
@@ -62,7 +63,7 @@ export function openSeries(bytes: SeriesBytes): Source {
       );
     },
     accuracy: seriesAccuracy,
-    checksum: () => sha256(bytes),
+    checksum: () => sha256(bytes.planets, bytes.moon),
     describe: () => descriptionOf(planets, moon),
   });
 }
@@ -117,13 +118,4 @@ function descriptionOf(planets: ReadonlyMap<string, PoissonSeries>, moon: Poisso
     ...[...planets.values()].map((series) => row(series, POINTS.sun)),
     row(moon, POINTS.earth),
   ].join("\n");
-}
-
-/** Of the planets' file and then the Moon's. */
-async function sha256({ planets, moon }: SeriesBytes): Promise<string> {
-  const both = new Uint8Array(planets.length + moon.length);
-  both.set(planets);
-  both.set(moon, planets.length);
-  const digest = await globalThis.crypto.subtle.digest("SHA-256", both);
-  return [...new Uint8Array(digest)].map((byte) => byte.toString(16).padStart(2, "0")).join("");
 }

@@ -8,19 +8,30 @@ import { timelineFor } from "./timeline-for.ts";
 /** How far the distance may be from its extreme. */
 export type Nearness = { readonly km: number } | { readonly percent: number };
 
+/** Why an end is missing: the sources end first, or the distance has not left the limit within ten periods. */
+export type WhyNoEnd = "no-data" | "stays-near";
+
 /** The interval around a passage in which the distance stays near its extreme. Frozen; TDB seconds past J2000. */
 export interface NearWindow {
-  /** `null` where the sources begin before the distance leaves the limit. */
+  /** `null` where the distance is not seen to come into the limit. */
   readonly from: number | null;
-  /** `null` where the sources end before it does. */
+  /** `null` where it is not seen to leave it. */
   readonly to: number | null;
-  /** Whether an end is missing for that reason. */
+  /** Whether an end is missing. */
   readonly cut: boolean;
+  /** Why; `stays-near` where the two ends are missing for different reasons, `null` where both are there. */
+  readonly why: WhyNoEnd | null;
   /** The distance at the ends, km. */
   readonly limitKm: number;
 }
 
 const TOLERANCE_SECONDS = 0.01;
+
+/**
+ * Half-periods over which the limit may be kept before the search is given up: a nearly round orbit may stay within a percent for ever.
+ * A distance that leaves the limit at all does so at the first apsis of the other kind, or within a year or so where the Sun makes orbits breathe.
+ */
+const MOST_HALF_PERIODS = 20;
 
 /**
  * Gives the interval during which the distance stays within a limit of a passage's extreme.
@@ -54,10 +65,11 @@ export function nearWindow(ephemeris: Ephemeris, passage: Passage | TrackPassage
       ) ?? own
     );
   };
-  const edge = (side: 1 | -1): number | null => {
+  const edge = (side: 1 | -1): number | WhyNoEnd => {
     const step = (side * pair.sampleSeconds) / 4;
     let at = passage.tdbSeconds;
     let supply = supplyOf(at);
+    const last = at + side * MOST_HALF_PERIODS * pair.halfPeriodSeconds;
     while (supply) {
       const { range, span } = supply;
       const excess = (t: number) => outward * (range.distance(t) - limitKm);
@@ -70,14 +82,16 @@ export function nearWindow(ephemeris: Ephemeris, passage: Passage | TrackPassage
       if (next === at) {
         // the end of this source: go on with the one that covers what lies beyond
         const beyond = timeline.supplyAt(at + side);
-        if (!beyond || beyond === supply) return null;
+        if (!beyond || beyond === supply) return "no-data";
         supply = beyond;
       }
+      if (side * (next - last) > 0) return "stays-near";
       at = next;
     }
-    return null;
+    return "no-data";
   };
-  const from = edge(-1);
-  const to = edge(1);
-  return Object.freeze({ from, to, cut: from === null || to === null, limitKm });
+  const ends = [edge(-1), edge(1)];
+  const [from = null, to = null] = ends.map((end) => (typeof end === "number" ? end : null));
+  const why = ends.find((end) => end === "stays-near") ?? ends.find((end) => end === "no-data") ?? null;
+  return Object.freeze({ from, to, cut: why !== null, why, limitKm });
 }

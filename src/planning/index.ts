@@ -1,5 +1,4 @@
 export { type MatchedPair, matchedPairs } from "./matched-pairs.ts";
-export type { WhyNoNear } from "./near-interval.ts";
 export { planIcs } from "./plan-ics.ts";
 export type { PlanOptions, PlanSite } from "./plan-options.ts";
 export { planPassage } from "./plan-passage.ts";

@@ -1,3 +1,4 @@
+import { PASSAGE_FIELDS } from "../passages/passage-fields.ts";
 import type { PlanRow } from "./plan-row.ts";
 
 /** A row with its windows as one text, for tables. */
@@ -10,25 +11,7 @@ export function planRecord(row: PlanRow): PlanRecord {
 
 /** The fields of a row, in order. */
 export const PLAN_NAMES = [
-  "pair",
-  "targetPoint",
-  "centrePoint",
-  "kind",
-  "term",
-  "rank",
-  "existence",
-  "tdbSeconds",
-  "tdb",
-  "utc",
-  "utcBasis",
-  "distanceKm",
-  "distanceAu",
-  "timeUncertaintySeconds",
-  "distanceUncertaintyKm",
-  "utcUncertaintySeconds",
-  "rangeAccelerationKmPerDay2",
-  "source",
-  "accuracyBasis",
+  ...PASSAGE_FIELDS,
   "site",
   "zone",
   "local",

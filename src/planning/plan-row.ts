@@ -1,5 +1,5 @@
+import type { WhyNoEnd } from "../passages/near-window.ts";
 import type { PassageRow } from "../passages/to-row.ts";
-import type { WhyNoNear } from "./near-interval.ts";
 
 /** Why a body does not rise or set around a passage. */
 export type WhyNoRise = "stays-up" | "stays-down" | "no-data";
@@ -69,7 +69,7 @@ export interface PlanRow extends PassageRow {
   readonly nearToUtc: string | null;
   /** Whether one of these ends is not known. */
   readonly nearCut: boolean;
-  readonly whyNoNear: WhyNoNear | null;
+  readonly whyNoNear: WhyNoEnd | null;
   /** Near and up and dark. */
   readonly windows: readonly PlanWindow[];
   /** Whether the near interval reaches farther than windows are looked for. */

@@ -5,6 +5,7 @@ import type { Ephemeris } from "../ephemeris/open-sources.ts";
 import type { Span } from "../ephemeris/source.ts";
 import { ApsidaryError } from "../error.ts";
 import { brentMinimum } from "../numeric/brent-minimum.ts";
+import { nearWindow } from "../passages/near-window.ts";
 import type { Passage } from "../passages/passage.ts";
 import { toRow } from "../passages/to-row.ts";
 import { rounded } from "../report/rounded.ts";
@@ -14,7 +15,6 @@ import { formatTdb } from "../time/format-tdb.ts";
 import { utcText } from "../time/format-utc.ts";
 import { zoneOf } from "../time/zone-of.ts";
 import { bodyInSky, LIGHT_SPEED, norm, type Place, sunInSky } from "./body-in-sky.ts";
-import { nearInterval } from "./near-interval.ts";
 import { completePlanOptions, type PlanOptions, type PlanSite, siteLabel } from "./plan-options.ts";
 import type { PlanRow, WhyNoRise, WhyNoTransit, WhyNot } from "./plan-row.ts";
 import { commonStretches, type Stretch, stretchesAbove } from "./stretches.ts";
@@ -127,7 +127,7 @@ export function planner(
     const upInDay = minAltitudeDeg === 0 ? commonStretches(stays, [day]) : aboveLeast(day);
     const best = highest(observable(upInDay));
 
-    const near = nearInterval(ephemeris, passage, within);
+    const near = nearWindow(ephemeris, passage, within);
     const reach = around(Math.min(windowDays * DAY_SECONDS, 2 * pair.halfPeriodSeconds));
     const from = Math.max(near.from ?? -Infinity, reach.from);
     const to = Math.min(near.to ?? Infinity, reach.to);
