@@ -23,6 +23,7 @@ export { parseOmmFile } from "./orbit/omm-file.ts";
 export type { Orbit, OrbitField } from "./orbit/orbit.ts";
 export { orbitFrom } from "./orbit/orbit-from.ts";
 export type { OrbitGiven } from "./orbit/orbit-given.ts";
+export { perturbedTrack } from "./orbit/perturbed-track.ts";
 export { parseQuantity, type Quantity } from "./orbit/quantity.ts";
 export { type SatelliteTrack, satelliteTrack } from "./orbit/satellite-track.ts";
 export { readStar, type Star, type StarField, type StarGiven } from "./orbit/star.ts";

@@ -3,6 +3,7 @@ import { readFile, stat } from "node:fs/promises";
 import { basename, extname } from "node:path";
 import { type BodyName, physicalBody } from "../bodies/physical.ts";
 import { ApsidaryError } from "../error.ts";
+import type { ElementsGiven } from "../orbit/elements.ts";
 import type { MeanElements } from "../orbit/mean-elements.ts";
 import type { SatelliteTrack } from "../orbit/satellite-track.ts";
 import type { Track } from "../orbit/track.ts";
@@ -16,6 +17,7 @@ export interface TrackOptions {
   readonly omm?: string;
   readonly tle?: string;
   readonly star?: string;
+  readonly perturbed?: boolean;
   readonly about?: string;
 }
 
@@ -25,9 +27,13 @@ const MOST_BYTES = 200e6;
 /**
  * Reads the tracks that the options name. Each is called after its file in the rows, and carries the file's checksum.
  *
+ * @param perturbed makes the track of elements where the planets' pull is asked for
  * @throws ApsidaryError `unreadable` for a file that cannot be read; whatever is wrong in it, with its name
  */
-export async function tracksOf({ elements, table, omm, tle, star, about }: TrackOptions): Promise<Track[]> {
+export async function tracksOf(
+  { elements, table, omm, tle, star, about }: TrackOptions,
+  perturbed: ((given: ElementsGiven) => Track) | null = null,
+): Promise<Track[]> {
   if (about !== undefined && table === undefined) {
     throw new ApsidaryError("bad-option", "--about goes with --table; elements name their central body themselves.");
   }
@@ -37,7 +43,7 @@ export async function tracksOf({ elements, table, omm, tle, star, about }: Track
       ...(await readTracks("--elements", elements, async (text) => {
         const { parseElementsFile } = await import("../orbit/elements-file.ts");
         const { elementsTrack } = await import("../orbit/elements-track.ts");
-        return parseElementsFile(text).map((given) => elementsTrack(given));
+        return parseElementsFile(text).map((given) => perturbed?.(given) ?? elementsTrack(given));
       })),
     );
   }

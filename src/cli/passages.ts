@@ -50,6 +50,7 @@ Examples:
   apsidary passages neptune-sun --from 2040 --to 2055 --rank principal
   apsidary passages moon-earth --from 1066-09-25 --next 2 --calendar julian
   apsidary passages --elements probe.json --from 2027 --to 2028
+  apsidary passages --elements comet.json --perturbed --from 2027 --to 2035
   apsidary passages --tle satellites.txt --from 2027-03-01 --next 20
   apsidary passages --table flight.csv --about earth --from 2027-03-01 --to 2027-03-04
   apsidary passages moon-earth --from 2027 --to 2047 --format csv --out moon.csv`,
@@ -71,6 +72,7 @@ function addTrackOptions(command: Command): Command {
       "satellites: orbit mean-elements messages as XML, KEY = VALUE or JSON; needs the package satellite.js",
     )
     .option("--tle <file>", "satellites: two-line elements; needs the package satellite.js")
+    .option("--perturbed", "with --elements about the sun: integrate them with the pull of the planets over the span")
     .option("--star <file>", "binary stars: the elements of their orbits as JSON")
     .option("--table <file>", "a table of states of your own, as CSV; the pair is called after the file")
     .option("--about <body>", "the body at the centre of --table: heights are above its radius");

@@ -2,6 +2,8 @@ import type { Pair } from "../bodies/pair.ts";
 import type { TrackPair } from "../bodies/track-pair.ts";
 import type { Ephemeris } from "../ephemeris/open-sources.ts";
 import { ApsidaryError } from "../error.ts";
+import type { ElementsGiven } from "../orbit/elements.ts";
+import type { Track } from "../orbit/track.ts";
 import { mergedPassages } from "../passages/merged-passages.ts";
 import type { Passage, TrackPassage } from "../passages/passage.ts";
 import type { PassageQuery } from "../passages/passages.ts";
@@ -58,7 +60,7 @@ export async function runPassages(words: readonly string[], options: PassagesOpt
   const rank = choiceOf("--rank", options.rank ?? "all", ["principal", "all"]);
   const calendar = calendarOf(options);
   const count = countOf(options);
-  const tracks = await tracksOf(options);
+  const tracks = await tracksOf(options, options.perturbed ? await pulledBy(options, calendar) : null);
   const pairs = [...(words.length > 0 ? pairsOf(words) : []), ...tracks.map((track) => track.pair)];
 
   const ephemeris = await openFor(options, tracks);
@@ -96,6 +98,25 @@ function requirePairs(words: readonly string[], { elements, table, omm, tle, sta
     "bad-input",
     "the argument <pairs> is missing; name a pair such as moon-earth, or give --elements, --omm, --tle, --star or --table. See: apsidary passages --help",
   );
+}
+
+/** Gives what makes a track of elements with the planets' pull over the span asked for. @throws ApsidaryError `bad-option`, as `edgeOf` */
+async function pulledBy(options: PassagesOptions, calendar: Calendar): Promise<(given: ElementsGiven) => Track> {
+  if (options.elements === undefined) {
+    throw new ApsidaryError("bad-option", "--perturbed goes with --elements: it adds the planets' pull to them.");
+  }
+  if (options.to === undefined) {
+    throw new ApsidaryError(
+      "bad-option",
+      "--perturbed integrates over the span: give its end, such as --to 2028, instead of --next.",
+    );
+  }
+  const { perturbedTrack } = await import("../orbit/perturbed-track.ts");
+  const ephemeris = await openFor(options);
+  const from = edgeOf("--from", options.from, ephemeris.leapSeconds, calendar);
+  const to = edgeOf("--to", options.to, ephemeris.leapSeconds, calendar);
+  requireOrder(from, to, options);
+  return (given) => perturbedTrack(ephemeris, given, { from, to });
 }
 
 function* rowsOf(

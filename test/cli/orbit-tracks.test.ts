@@ -18,6 +18,17 @@ const PROBE = {
   uncertainty: { semiMajorAxisKm: 0.005, eccentricity: 1e-6, periapsisAt: 2 },
 } as const;
 
+const PLANETOID = {
+  name: "planetoid-sun",
+  about: "sun",
+  semiMajorAxisKm: "2.7672000au",
+  eccentricity: "0.0783000",
+  epoch: "JD 2461000.5",
+  meanAnomalyDeg: "188.7000",
+  inclinationDeg: 10.59,
+  nodeDeg: 80.25,
+  argumentDeg: 73.3,
+} as const;
 const BINARY = {
   name: "star-b-star-a",
   periastronAt: "JD 2455000.25",
@@ -74,6 +85,7 @@ beforeAll(() => {
   file("message.json", JSON.stringify([MESSAGE]));
   file("other.xml", asXml({ ...MESSAGE, CENTER_NAME: "MARS" }));
   file("binary.json", JSON.stringify(BINARY));
+  file("planetoid.json", JSON.stringify(PLANETOID));
   file("empty.json", "");
   file("half.json", '[{"name": "probe-earth", ');
   file("twice.json", JSON.stringify([PROBE, PROBE]));
@@ -175,6 +187,25 @@ describe("apsidary passages, of tracks", () => {
     expect(text).toMatch(/00005-earth {2}apogee .*user:one\.txt/);
   });
 
+  test("integrates elements with the planets' pull when asked, and marks either answer as what it is", async () => {
+    const ask = (...more: string[]) =>
+      answer("--elements", "planetoid.json", ...more, "--from", "2027", "--to", "2037");
+    const alone = await ask();
+    const pulled = await ask("--perturbed");
+    expect(alone).toContain("two bodies alone");
+    expect(pulled).toContain("with the pull of the planets");
+    const perihelia = async (...more: string[]) =>
+      JSON.parse(await ask(...more, "--format", "json")).rows.filter(
+        (row: { term: string }) => row.term === "perihelion",
+      );
+    const [first, second] = await Promise.all([perihelia(), perihelia("--perturbed")]);
+    expect(first.length).toBe(second.length);
+    const differences = first.map((row: { tdbSeconds: number }, i: number) =>
+      Math.abs(row.tdbSeconds - second[i].tdbSeconds),
+    );
+    expect(Math.max(...differences)).toBeGreaterThan(86400); // Jupiter moves it by days
+  });
+
   test("lists a binary star's periastra, each less sure than the one before, and no heights", async () => {
     const text = await answer("--star", "binary.json", "--from", "2027", "--to", "2040", "--format", "json");
     const { made, rows } = JSON.parse(text);
@@ -224,6 +255,12 @@ describe("apsidary passages, of tracks", () => {
     ["noise for two-line elements", ["--tle", "noise.csv"], /noise\.csv: /],
     ["noise for a message", ["--omm", "noise.csv"], /noise\.csv: /],
     ["a message of another centre", ["--omm", "other.xml"], /CENTER_NAME is "MARS"/],
+    ["the planets' pull on nothing", ["moon-earth", "--perturbed"], /--perturbed goes with --elements/],
+    [
+      "the planets' pull about the Earth",
+      ["--elements", "probe.csv", "--perturbed"],
+      /about the sun alone, not about earth/,
+    ],
     ["a star that is none", ["--star", "probe.json"], /"about" is no element of a star/],
     ["noise for a star", ["--star", "noise.csv"], /noise\.csv: it is no JSON/],
     ["a body that is none", ["--table", "flight probe.csv", "--about", "erth"], /did you mean "earth"/],
