@@ -37,7 +37,7 @@ export type { Track } from "./orbit/track.ts";
 export type { TrackScale, TrackTime } from "./orbit/track-time.ts";
 export { type BodyShare, type TwoBodyShares, twoBodyShares } from "./orbit/two-body-shares.ts";
 export { mergedPassages } from "./passages/merged-passages.ts";
-export { type Nearness, type NearWindow, nearWindow } from "./passages/near-window.ts";
+export { type Nearness, type NearWindow, nearWindow, type WhyNoEnd } from "./passages/near-window.ts";
 export { type NeighbourOptions, nextPassage, previousPassage } from "./passages/next-passage.ts";
 export { isTrackPassage, type Passage, type TrackPassage } from "./passages/passage.ts";
 export { type PassageQuery, passages } from "./passages/passages.ts";

@@ -6,6 +6,7 @@ import type { ElementsGiven } from "../orbit/elements.ts";
 import type { Track } from "../orbit/track.ts";
 import { mergedPassages } from "../passages/merged-passages.ts";
 import type { Passage, TrackPassage } from "../passages/passage.ts";
+import { PASSAGE_FIELDS } from "../passages/passage-fields.ts";
 import type { PassageQuery } from "../passages/passages.ts";
 import { timelineFor } from "../passages/timeline-for.ts";
 import { toRow } from "../passages/to-row.ts";
@@ -22,28 +23,6 @@ import { type ListedPassage, passagesReport } from "./passages-report.ts";
 import { mayShowProgress, withProgress } from "./progress.ts";
 import { provenanceOf } from "./provenance.ts";
 import { writeAnswer } from "./write-answer.ts";
-
-const NAMES: readonly (keyof ListedPassage)[] = [
-  "pair",
-  "targetPoint",
-  "centrePoint",
-  "kind",
-  "term",
-  "rank",
-  "existence",
-  "tdbSeconds",
-  "tdb",
-  "utc",
-  "utcBasis",
-  "distanceKm",
-  "distanceAu",
-  "timeUncertaintySeconds",
-  "distanceUncertaintyKm",
-  "utcUncertaintySeconds",
-  "rangeAccelerationKmPerDay2",
-  "source",
-  "accuracyBasis",
-];
 
 /**
  * Answers `apsidary passages`.
@@ -81,7 +60,7 @@ export async function runPassages(words: readonly string[], options: PassagesOpt
   const pieces = await answerPieces<ListedPassage>(format, {
     head: { schema: "apsidary/passages/1", made },
     names: [
-      ...NAMES,
+      ...PASSAGE_FIELDS,
       ...(tracks.length > 0 ? (["heightKm"] as const) : []),
       ...(calendar === "julian" ? (["utcJulian"] as const) : []),
     ],
