@@ -13,6 +13,9 @@ export interface TrackPair extends Pair<string> {
 /** Stands for a point that has no SPK id: the least number of SPK's integers, which no body has. Rows tell `null`. */
 export const UNNAMED_POINT: PointId = -2_147_483_648;
 
+/** Seconds; instants resolve a microsecond, and what is quicker is a slip of units. */
+const LEAST_HALF_PERIOD = 1;
+
 /** Tells whether a pair is that of a track. */
 export function isTrackPair(pair: Pair<string>): pair is TrackPair {
   return "referenceRadiusKm" in pair;
@@ -40,6 +43,12 @@ export function trackPair(given: Omit<TrackPair, "target"> & { readonly target?:
   for (const [what, seconds] of Object.entries({ sampleSeconds, halfPeriodSeconds })) {
     if (seconds > 0 && Number.isFinite(seconds)) continue;
     throw new ApsidaryError("bad-option", `${what} of ${name} must be above zero seconds, not ${seconds}.`);
+  }
+  if (halfPeriodSeconds < LEAST_HALF_PERIOD) {
+    throw new ApsidaryError(
+      "bad-option",
+      `${name} goes round in ${2 * halfPeriodSeconds} s; an orbit must take ${2 * LEAST_HALF_PERIOD} s at the least. Check the units.`,
+    );
   }
   return Object.freeze({ ...given, target: given.target ?? UNNAMED_POINT });
 }

@@ -1,5 +1,5 @@
-import Papa from "papaparse";
 import { ApsidaryError } from "../error.ts";
+import { csvRecords } from "./csv-records.ts";
 import type { ElementsGiven } from "./elements.ts";
 
 const bad = (message: string) => new ApsidaryError("bad-input", message);
@@ -48,22 +48,13 @@ function fromJson(body: string): ElementsGiven[] {
 }
 
 function fromCsv(body: string): ElementsGiven[] {
-  const { data, meta, errors } = Papa.parse<Record<string, string>>(body, {
-    header: true,
-    skipEmptyLines: "greedy",
-    comments: "#",
-    transformHeader: (name) => name.trim(),
+  const { rows } = csvRecords(body, (fields) => {
+    if (!fields.includes("name")) throw bad("it is neither JSON nor a CSV with a header that has a column `name`.");
   });
-  if (!meta.fields?.includes("name")) {
-    throw bad("it is neither JSON nor a CSV with a header that has a column `name`.");
-  }
-  const [fault] = errors.filter((error) => error.code !== "UndetectableDelimiter");
-  if (fault) throw bad(`row ${(fault.row ?? 0) + 1} cannot be read: ${fault.message}.`);
-  return data.map((row) => {
+  return rows.map((row) => {
     const given: Record<string, unknown> = {};
     const uncertainty: Record<string, string> = {};
-    for (const [name, cell] of Object.entries(row)) {
-      const value = cell.trim();
+    for (const [name, value] of Object.entries(row)) {
       if (value === "") continue;
       if (name.startsWith(WIDTH)) uncertainty[name.slice(WIDTH.length)] = value;
       else given[name] = value;

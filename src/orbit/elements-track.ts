@@ -1,6 +1,7 @@
 import { DAY_SECONDS } from "../bodies/constants.ts";
 import { trackPair } from "../bodies/track-pair.ts";
 import type { Accuracy } from "../ephemeris/source.ts";
+import { ApsidaryError } from "../error.ts";
 import { type Elements, type ElementsGiven, meanMotionOf, readElements } from "./elements.ts";
 import { keplerMotion } from "./kepler-motion.ts";
 import { ALL_TIME, centreOf, type Track, trackOf } from "./track.ts";
@@ -12,6 +13,8 @@ const OPEN_STEP = 90 * DAY_SECONDS;
 /** What an instant of some 10⁹ s resolves, seconds, with room for a division. */
 const RESOLUTION = 1e-6;
 const EPSILON = 2 ** -52;
+/** Below this the rounding of a state makes more of a range rate than the shape does. */
+const LEAST_ECCENTRICITY = 1e-10;
 
 /**
  * Makes a track from osculating elements: Kepler's motion, two bodies alone, for all time.
@@ -34,6 +37,12 @@ export function elementsTrack(given: ElementsGiven | Elements): Track {
     periapsisTdb,
     ...(elements.axes === null ? {} : { axes: elements.axes }),
   });
+  if (eccentricity < LEAST_ECCENTRICITY) {
+    throw new ApsidaryError(
+      "bad-input",
+      `the orbit of ${elements.name} is a circle to rounding (eccentricity ${eccentricity}): it has no nearest and no farthest point.`,
+    );
+  }
   // how fast the range rate turns at the periapsis sets how closely its zero is bracketed
   const turn = Math.sqrt(orbit.periapsisKm ** 3 / orbit.gravitationalParameterKm3S2);
   const pair = trackPair({

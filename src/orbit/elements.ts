@@ -96,9 +96,16 @@ export function readElements(given: ElementsGiven): Elements {
   }
   const meanMotion = meanMotionOf(orbit);
   const timeGiven = when.field in uncertainty;
+  // an apsis may stand anywhere on a circle, but no farther off than half a turn
+  const halfTurn = orbit.periodSeconds === null ? Infinity : orbit.periodSeconds / 2;
+  const apsidesLine = orbit.eccentricity === 0 ? halfTurn : spread.eccentricity / (orbit.eccentricity * meanMotion);
   const ownTime = timeGiven
     ? half.of(when.field) * (when.field === "meanAnomalyDeg" ? DEGREE / meanMotion : 1)
-    : Math.hypot(when.halfWidth, spread.eccentricity / (Math.max(orbit.eccentricity, 1e-300) * meanMotion));
+    : Math.hypot(when.halfWidth, Math.min(apsidesLine, halfTurn));
+  const extremes = [...Object.values(spread), ownTime, meanMotion].map((value) => value * value * 1e12);
+  if (!extremes.every(Number.isFinite)) {
+    throw bad(`the elements of ${name}, or their uncertainties, go beyond what numbers hold. Check their units.`);
+  }
   const epochWidth = when.field === "meanAnomalyDeg" ? half.of("epoch") : 0;
   return Object.freeze({
     name,

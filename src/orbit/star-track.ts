@@ -1,6 +1,7 @@
 import { DAY_SECONDS } from "../bodies/constants.ts";
 import { trackPair, UNNAMED_POINT } from "../bodies/track-pair.ts";
 import type { Accuracy, Motion } from "../ephemeris/source.ts";
+import { ApsidaryError } from "../error.ts";
 import { keplerMotion } from "./kepler-motion.ts";
 import { DEVIATIONS, readStar, type Star, type StarGiven, type StarOrbit, starOrbit } from "./star.ts";
 import { ALL_TIME, type Track, trackOf } from "./track.ts";
@@ -8,6 +9,8 @@ import { ALL_TIME, type Track, trackOf } from "./track.ts";
 /** Speed of light, km/s; exact. */
 const LIGHT = 299_792.458;
 const RESOLUTION = 1e-6;
+/** Below this the rounding of a state makes more of a range rate than the shape does. */
+const LEAST_ECCENTRICITY = 1e-10;
 
 /**
  * Makes a track from the orbit of a binary star: the distance of its stars, by the time at which the light of the first one arrives at the
@@ -23,7 +26,17 @@ export function starTrack(given: StarGiven | Star): Track {
   const star = "errorsGiven" in given ? given : readStar(given);
   const orbit = starOrbit(star.values);
   const { periodSeconds: period, eccentricity: e, semiMajorAxisKm: a } = orbit;
+  if (e < LEAST_ECCENTRICITY) {
+    throw new ApsidaryError("bad-input", `the orbit of ${star.name} is a circle to rounding: it has no periastron.`);
+  }
   const meanMotion = (2 * Math.PI) / period;
+  const extremes = [starEpoch(star.values, 1), a ** 3 * meanMotion ** 2, ...star.covariance.flat()];
+  if (!extremes.every(Number.isFinite) || !(a ** 3 * meanMotion ** 2 > 0)) {
+    throw new ApsidaryError(
+      "bad-input",
+      `the elements of ${star.name} go beyond what numbers hold. Check their units.`,
+    );
+  }
   const motion = seenMotion(star, orbit);
   const pair = trackPair({
     name: star.name,

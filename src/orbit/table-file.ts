@@ -1,6 +1,6 @@
-import Papa from "papaparse";
 import { ApsidaryError } from "../error.ts";
 import { nearestName } from "../nearest-name.ts";
+import { csvRecords } from "./csv-records.ts";
 import { digitHalfWidth } from "./digit-half-width.ts";
 import type { StateTable } from "./table-interpolation.ts";
 import { trackTime } from "./track-time.ts";
@@ -28,27 +28,9 @@ export interface TableFile extends StateTable {
  * @throws ApsidaryError `bad-input`, in one line that names the row
  */
 export function parseTableFile(text: string): TableFile {
-  const { data, meta, errors } = Papa.parse<Record<string, string>>(text.replace(/^\uFEFF/, ""), {
-    header: true,
-    skipEmptyLines: "greedy",
-    comments: "#",
-    transformHeader: (name) => name.trim(),
-  });
-  const fields = meta.fields ?? [];
+  const { fields, rows: data } = csvRecords(text, requireHeader);
   const timeName = TIME.find((name) => fields.includes(name));
-  const missing = [...(timeName ? [] : ["tdb"]), ...POSITION].find((name) => !fields.includes(name));
-  if (missing) {
-    const near = nearestName(missing, fields);
-    throw bad(
-      `the table has no column ${missing}${near ? ` (there is ${JSON.stringify(near.slice(0, 40))})` : ""}; ` +
-        `its header must be of ${KNOWN.join(", ")}: one of the first three, the positions, and all velocities or none.`,
-    );
-  }
   const some = VELOCITY.filter((name) => fields.includes(name));
-  if (some.length > 0 && some.length < 3)
-    throw bad(`the table has ${some.join(", ")}, but not all of ${VELOCITY.join(", ")}.`);
-  const [fault] = errors.filter((error) => error.code !== "UndetectableDelimiter");
-  if (fault) throw bad(`row ${(fault.row ?? 0) + 1} of the table cannot be read: ${fault.message}.`);
   const times = new Float64Array(data.length);
   const positions = new Float64Array(3 * data.length);
   const velocities = some.length === 3 ? new Float64Array(3 * data.length) : null;
@@ -79,4 +61,20 @@ export function parseTableFile(text: string): TableFile {
     });
   });
   return { times, positions, velocities, digits: { km, kmS } };
+}
+
+/** Refuses a header that lacks a column. */
+function requireHeader(fields: readonly string[]): void {
+  const timeName = TIME.find((name) => fields.includes(name));
+  const missing = [...(timeName ? [] : ["tdb"]), ...POSITION].find((name) => !fields.includes(name));
+  if (missing) {
+    const near = nearestName(missing, fields);
+    throw bad(
+      `the table has no column ${missing}${near ? ` (there is ${JSON.stringify(near.slice(0, 40))})` : ""}; ` +
+        `its header must be of ${KNOWN.join(", ")}: one of the first three, the positions, and all velocities or none.`,
+    );
+  }
+  const some = VELOCITY.filter((name) => fields.includes(name));
+  if (some.length > 0 && some.length < 3)
+    throw bad(`the table has ${some.join(", ")}, but not all of ${VELOCITY.join(", ")}.`);
 }

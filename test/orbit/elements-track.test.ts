@@ -138,30 +138,35 @@ describe("a track from osculating elements", () => {
     ["half a time", { semiMajorAxisKm: 7000, eccentricity: 0, epoch: 0 }, /only epoch is given/],
     [
       "two times",
-      { semiMajorAxisKm: 7e3, eccentricity: 0, periapsisAt: 0, meanAnomalyDeg: 3 },
+      { semiMajorAxisKm: 7e3, eccentricity: 0.1, periapsisAt: 0, meanAnomalyDeg: 3 },
       /too many: periapsisAt/,
     ],
+    [
+      "a circle",
+      { semiMajorAxisKm: 7e3, eccentricity: 0, periapsisAt: T },
+      /is a circle to rounding .* no nearest and no farthest/,
+    ],
     ["no size", { eccentricity: 0.1, periapsisAt: 0 }, /too few: only eccentricity/],
-    ["an unknown element", { semiMajorAxis: 7e3, eccentricity: 0, periapsisAt: 0 }, /did you mean "semiMajorAxisKm"/],
+    ["an unknown element", { semiMajorAxis: 7e3, eccentricity: 0.1, periapsisAt: 0 }, /did you mean "semiMajorAxisKm"/],
     ["a time that is none", { semiMajorAxisKm: 7e3, eccentricity: 0, periapsisAt: "soon" }, /"soon", which is no time/],
     [
       "one angle of three",
-      { semiMajorAxisKm: 7e3, eccentricity: 0, periapsisAt: 0, nodeDeg: 3 },
+      { semiMajorAxisKm: 7e3, eccentricity: 0.1, periapsisAt: 0, nodeDeg: 3 },
       /inclinationDeg is missing/,
     ],
     [
       "an uncertainty of nothing",
-      { semiMajorAxisKm: 7e3, eccentricity: 0, periapsisAt: 0, uncertainty: { excentricity: 1 } },
+      { semiMajorAxisKm: 7e3, eccentricity: 0.1, periapsisAt: 0, uncertainty: { excentricity: 1 } },
       /no such element; did you mean "eccentricity"/,
     ],
     [
       "an uncertainty below zero",
-      { semiMajorAxisKm: 7e3, eccentricity: 0, periapsisAt: 0, uncertainty: { eccentricity: -1 } },
+      { semiMajorAxisKm: 7e3, eccentricity: 0.1, periapsisAt: 0, uncertainty: { eccentricity: -1 } },
       /must be zero or above/,
     ],
     [
       "the name of a pair that is known",
-      { name: "moon-earth", semiMajorAxisKm: 7e3, eccentricity: 0, periapsisAt: 0 },
+      { name: "moon-earth", semiMajorAxisKm: 7e3, eccentricity: 0.1, periapsisAt: 0 },
       /moon-earth is a pair that the library knows/,
     ],
   ])("is refused for %s, in one line that names it", (_, more, says) => {

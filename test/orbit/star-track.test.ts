@@ -149,6 +149,7 @@ describe("a track from the orbit of a binary star", () => {
 
   test.each([
     ["no period", { periodDays: undefined }, /periodDays is missing/],
+    ["a circle", { eccentricity: 0 }, /is a circle to rounding: it has no periastron/],
     ["no size", { k1KmS: null }, /the size is missing/],
     ["an open orbit", { eccentricity: 1.1 }, /eccentricity is 1\.1; a binary's is 0 up to 1/],
     ["a misspelt element", { excentricity: 1 }, /did you mean "eccentricity"/],
