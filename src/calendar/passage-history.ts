@@ -52,7 +52,7 @@ export function passageHistory(ephemeris: Ephemeris, pair: Pair, near: number, c
   };
   const passagesIn = (start: number, end: number): PastPassage[] => {
     const found: PastPassage[] = [];
-    const next = timeline.extremaFrom(start);
+    const next = timeline.extremaFrom(start, end);
     for (let it = next(); it && it.tdb < end; it = next()) {
       if (it.tdb < start) continue;
       found.push({
