@@ -1,3 +1,4 @@
+import { dayOfGregorian } from "../time/civil-calendar.ts";
 import type { ListRow, ReadRecord, UnreadRow } from "./list-row.ts";
 import { type ReadSettings, readCells } from "./read-cells.ts";
 import type { ColumnRole } from "./read-header.ts";
@@ -12,7 +13,8 @@ const COLUMNS: readonly ColumnRole[] = [
 /**
  * Gives a function that reads the lines of a calendar file (iCalendar, RFC 5545): an event whose summary names a kind of passage and a body is a row.
  *
- * Events without a kind are passed over. A time without seconds is told to the minute, a date alone to the day. Events cannot be mended in their place.
+ * Events without a kind are passed over. A time without seconds is told to the minute, or to the hour where the calendar says so
+ * (`X-APSIDARY-UNIT`), a date alone to the day, or to the month or year that the event takes. Events cannot be mended in their place.
  */
 export function eventReader(settings: ReadSettings): (record: ListRecord) => ReadRecord {
   let event: Map<string, string> | null = null;
@@ -38,15 +40,41 @@ export function eventReader(settings: ReadSettings): (record: ListRecord) => Rea
 }
 
 function eventRows(line: number, event: ReadonlyMap<string, string>, settings: ReadSettings) {
-  const start = [...event].find(([name]) => /^DTSTART\b/.test(name));
-  const summary = [...event].find(([name]) => /^SUMMARY\b/.test(name))?.[1] ?? "";
-  const [, y, m, d, h, min, s, z] = /^(\d{4})(\d\d)(\d\d)(?:T(\d\d)(\d\d)(\d\d)(Z)?)?$/.exec(start?.[1] ?? "") ?? [];
-  const title = (/^[^\\,;]*/.exec(summary)?.[0] ?? "").trim();
-  if (!start || y === undefined || title === "") return [];
-  const clock = h === undefined ? "" : `T${h}:${min}${s === "00" ? "" : `:${s}`}${z ?? ""}`;
-  const zone = /TZID="?([^;:"]+)/.exec(start[0])?.[1] ?? "";
-  const values = [title, `${y}-${m}-${d}${clock}`, zone];
+  const property = (name: RegExp) => [...event].find(([key]) => name.test(key));
+  const start = property(/^DTSTART\b/);
+  const title = (/^[^\\,;]*/.exec(property(/^SUMMARY\b/)?.[1] ?? "")?.[0] ?? "").trim();
+  const told = (name: RegExp) => property(name)?.[1] ?? "";
+  const time = start && timeOf(start[1], told(/^DTEND\b/), told(/^X-APSIDARY-UNIT\b/), told(/^X-APSIDARY-OFFSET\b/));
+  if (!time || title === "") return [];
+  const zone = time.offset || (/TZID="?([^;:"]+)/.exec(start[0])?.[1] ?? "");
+  const values = [title, time.text, zone];
   const cells = values.map((value) => ({ value, start: 0, end: 0, quoted: false }));
   const rows = readCells(line, cells, values, COLUMNS, settings);
   return rows.filter((row) => !("problem" in row) || !row.problem.startsWith("names no kind"));
+}
+
+/** An event's time as text whose last digit tells its precision, and the offset of the clock on which it is a round number. */
+function timeOf(start: string, end: string, unit: string, offset: string): { text: string; offset: string } | null {
+  const [, y, m, d, h, min, s, z = ""] = DATE_TIME.exec(start) ?? [];
+  if (y === undefined || m === undefined || d === undefined) return null;
+  if (h === undefined || min === undefined) {
+    const [, ey, em, ed] = DATE_TIME.exec(end) ?? [];
+    const days = ey === undefined ? 1 : dayOf(ey, em, ed) - dayOf(y, m, d);
+    return { text: days > 300 ? y : days > 27 ? `${y}-${m}` : `${y}-${m}-${d}`, offset };
+  }
+  if (unit !== "hour" || z === "")
+    return { text: `${y}-${m}-${d}T${h}:${min}${s === "00" ? "" : `:${s}`}${z}`, offset: "" };
+  // whole hours of a zone with odd minutes: told on the nearest clock on which they are whole
+  const past = Number(min);
+  const wall = new Date(Date.UTC(Number(y), Number(m) - 1, Number(d), Number(h), past === 0 ? 0 : 60)).toISOString();
+  return {
+    text: wall.slice(0, 13).replace("T", " "),
+    offset: past === 0 ? "" : `+00:${String(60 - past).padStart(2, "0")}`,
+  };
+}
+
+const DATE_TIME = /^(\d{4})(\d\d)(\d\d)(?:T(\d\d)(\d\d)(\d\d)(Z)?)?$/;
+
+function dayOf(year = "", month = "", day = ""): number {
+  return dayOfGregorian(Number(year), Number(month), Number(day));
 }

@@ -36,9 +36,11 @@ function eventOf(row: CalendarRow, style: CompleteStyle, notes: readonly string[
   if (![row.tdb, row.local].every((iso) => /^\d{4}-/.test(iso) && !iso.startsWith("0000"))) {
     throw new ApsidaryError("bad-span", `a calendar file holds the years 1 to 9998; ${row.local} cannot stand in it.`);
   }
+  const when = whenOf(row, style);
   return {
+    ...("at" in when ? (row.printedUnit === "hour" ? { unit: "hour" } : {}) : { offset: row.local.slice(-6) }),
     uid: `${row.pair}-${row.kind}-${row.tdb.slice(0, row.tdb.indexOf("T"))}@apsidary`,
-    when: whenOf(row, style),
+    when,
     summary: summaryOf(row, notes),
     description: descriptionOf(row, style, notes).join("\n"),
   };
