@@ -114,16 +114,22 @@ export function judgeList(cases: readonly Case[]): ListHabit {
   const [first, second] = groups;
   const rival = Math.max(noneLog, constant.log, second?.log ?? -Infinity);
   const demand = first && /^(?:year-copied|kind-swapped)$/.test(first.cause.name) ? SHIFTED : NAMED;
+  // Where every row is right as it stands there is nothing to explain: a clock that is known better than UTC to come would only fit more snugly.
+  const spotless = sample.every((one) => Math.abs(one.residual) <= one.when.unitSeconds / 2 + one.bound);
   const named =
     first !== undefined &&
     sample.length > 1 &&
+    !spotless &&
     first.log - rival >= Math.log(NAMED) &&
     first.log - noneLog >= Math.log(demand)
       ? first
       : null;
   const against = Math.max(noneLog, constant.log);
   const alternatives: Alternative[] = groups
-    .filter((group) => group !== named && first && first.log > noneLog && first.log - group.log < Math.log(NAMED))
+    .filter(
+      (group) =>
+        !spotless && group !== named && first && first.log > noneLog && first.log - group.log < Math.log(NAMED),
+    )
     .map((group) => ({
       cause: group.cause.name,
       causeDetail: group.best.detail || null,

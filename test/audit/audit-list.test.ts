@@ -1,6 +1,8 @@
 import { beforeAll, describe, expect, test } from "vitest";
 import { auditList, type GivenRow } from "../../src/audit/audit-list.ts";
 import { type Ephemeris, openSources } from "../../src/ephemeris/open-sources.ts";
+import { passages } from "../../src/passages/passages.ts";
+import { toRow } from "../../src/passages/to-row.ts";
 import { DAY, HOUR, OFFICE, office } from "./made-list.ts";
 
 // The right minutes are those of the U.S. Naval Observatory (from memory); the slips are planted.
@@ -147,5 +149,18 @@ describe("auditList, distances", () => {
   ])("judges %s: %s %s", (text, verdict, cause) => {
     const row = distance(text);
     expect([row?.distanceVerdict, row?.cause]).toEqual([verdict, cause]);
+  });
+});
+
+describe("auditList, hours of a year for which UTC is only predicted", () => {
+  test("names no clock for a list whose every row is right as it stands", () => {
+    const rows = [...passages(ephemeris, "moon-earth", { from: "2200-01-01", to: "2201-01-01" })].map((passage) => {
+      const { kind, utc } = toRow(passage, ephemeris);
+      const hour = new Date(Math.round(Date.parse(utc) / 3600e3) * 3600e3).toISOString().slice(0, 13);
+      return { pair: "moon-earth", kind, when: hour.replace("T", " ") };
+    });
+    const { list, summary } = auditList(ephemeris, rows);
+    expect(summary.agrees).toBe(rows.length);
+    expect([list.cause, list.alternatives]).toEqual([null, []]);
   });
 });
