@@ -83,7 +83,9 @@ function readOne(
   const dateAt = whenAt >= 0 ? -1 : mine("date");
   // in a wide list the date column may be shared by a column of years, and a column of times may follow its date
   const timeAt = mine("time");
-  const whenCells = [whenAt, dateAt, timeAt].filter((i) => i >= 0);
+  // a whole date under a heading such as UT is the same instant on another clock, not the time of day of the date before it
+  const another = (whenAt >= 0 || dateAt >= 0) && /\d{4}-\d\d-\d\d/.test(valueAt(timeAt));
+  const whenCells = [whenAt, dateAt, another ? -1 : timeAt].filter((i) => i >= 0);
   const whenText = whenCells.map((i) => valueAt(i)).join(" ");
   const unread = (problem: string): UnreadRow => ({
     line,
