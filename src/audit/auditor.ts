@@ -48,7 +48,7 @@ export interface Auditor {
 /**
  * Rows that are read before the list is judged as a whole; a longer list is judged by these and goes on row by row, so that memory stays flat.
  */
-export const ROWS_HELD = 20_000;
+const ROWS_HELD = 20_000;
 /** Duplicates and missing passages that are told at most. */
 const MOST_TOLD = 10_000;
 /** Rows that must be right beside a slip before the list counts as right. */

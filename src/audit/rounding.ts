@@ -14,7 +14,7 @@ export const ROUNDING_RULES: readonly RoundingRule[] = Object.freeze(["usual", "
 export const RULE_SHARES: Readonly<Record<RoundingRule, number>> = Object.freeze({ usual: 0.7, other: 0.27, up: 0.03 });
 
 /** Gives the least value of published minus true that a rule can leave, seconds; the greatest is one unit more. */
-export function leastResidual(when: PublishedWhen, rule: RoundingRule): number {
+function leastResidual(when: PublishedWhen, rule: RoundingRule): number {
   const unit = when.unitSeconds;
   if (rule === "usual") return -unit / 2;
   if (rule === "up") return 0;

@@ -44,7 +44,7 @@ export function noteWords(
 }
 
 /** What must be read beside a passage. */
-export const CAUTIONS = {
+const CAUTIONS = {
   sun: "Never look at the Sun through any optics without a certified solar filter.",
   tides:
     "Perigee near new or full Moon: raised tides are likely. Local tide and weather authorities decide; this is not for " +

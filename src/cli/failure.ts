@@ -3,9 +3,9 @@ import { ApsidaryError } from "../error.ts";
 import { shown } from "./choice-of.ts";
 
 /** Exit status of a run that cannot use its input, or cannot read or write a file. */
-export const UNUSABLE = 2;
+const UNUSABLE = 2;
 /** Exit status of a run that failed through a fault of this program's own. */
-export const DEFECT = 70;
+const DEFECT = 70;
 
 /**
  * Tells a failure on standard error, and gives the exit status.

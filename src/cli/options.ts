@@ -3,7 +3,7 @@ import type { SourceChoice } from "../passages/timeline-for.ts";
 import { choiceOf } from "./choice-of.ts";
 
 /** The forms of an answer. */
-export const FORMATS = ["text", "json", "ndjson", "csv"] as const;
+const FORMATS = ["text", "json", "ndjson", "csv"] as const;
 /** The form of an answer. */
 export type Format = (typeof FORMATS)[number];
 

@@ -1,6 +1,7 @@
 import type { Pair } from "../bodies/pair.ts";
 import { type PointId, pointLabel } from "../bodies/point.ts";
 import { ApsidaryError } from "../error.ts";
+import { commonIntervals } from "../numeric/common-intervals.ts";
 import { sha256 } from "./sha256.ts";
 import type { Accuracy, Motion, Source, Span } from "./source.ts";
 import { addSegmentState, readSpk, type SpkSegment } from "./spk.ts";
@@ -121,20 +122,6 @@ function unionOf(spans: readonly Span[]): Span[] {
   return union;
 }
 
-function intersectionOf(a: readonly Span[], b: readonly Span[]): Span[] {
-  const common: Span[] = [];
-  for (let i = 0, j = 0; i < a.length && j < b.length; ) {
-    const x = a[i] as Span;
-    const y = b[j] as Span;
-    const from = Math.max(x.from, y.from);
-    const to = Math.min(x.to, y.to);
-    if (from < to) common.push({ from, to });
-    if (x.to < y.to) i++;
-    else j++;
-  }
-  return common;
-}
-
 /** Whether every one of some spans lies inside one of others; both in order, none overlapping. */
 function liesWithin(inner: readonly Span[], outer: readonly Span[]): boolean {
   let j = 0;
@@ -160,7 +147,7 @@ function findRoute(net: Net, target: PointId, centre: PointId, title: string): R
       for (const link of net.get(at) ?? []) {
         const step: Step = { link, sign: link.centre === at ? 1 : -1 };
         const to = step.sign === 1 ? link.target : link.centre;
-        const spans = intersectionOf(route.spans, link.spans);
+        const spans = commonIntervals(route.spans, link.spans);
         const before = reached.get(to) ?? [];
         if (spans.length === 0 || before.some((earlier) => liesWithin(spans, earlier))) continue;
         const longer = { steps: [...route.steps, step], spans };

@@ -5,7 +5,7 @@ import { digitHalfWidth } from "./digit-half-width.ts";
 import { type TrackTime, trackTime } from "./track-time.ts";
 
 /** The numbers of a star's orbit, by name; errors go by the same names. */
-export const STAR_FIELDS = [
+const STAR_FIELDS = [
   "periastronAt",
   "periodDays",
   "eccentricity",

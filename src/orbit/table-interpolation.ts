@@ -1,4 +1,5 @@
 import type { Motion } from "../ephemeris/source.ts";
+import { intervalAt } from "../numeric/interval-at.ts";
 
 /** A table of states: times in TDB seconds past J2000, growing; positions km, three by three; velocities km/s or none. */
 export interface StateTable {
@@ -61,13 +62,7 @@ export function interpolateTable({ times, positions, velocities }: StateTable): 
   };
 
   const hold = (tdb: number): void => {
-    let low = 0;
-    let high = times.length - 1;
-    while (high - low > 1) {
-      const half = (low + high) >> 1;
-      if ((times[half] as number) <= tdb) low = half;
-      else high = half;
-    }
+    const low = intervalAt(times, tdb);
     const start = Math.max(0, Math.min(low - (count >> 1) + 1, times.length - count));
     if (start !== first) build(start);
   };

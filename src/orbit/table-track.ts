@@ -2,6 +2,7 @@ import { type BodyName, physicalBody } from "../bodies/physical.ts";
 import { trackPair } from "../bodies/track-pair.ts";
 import type { Accuracy } from "../ephemeris/source.ts";
 import { ApsidaryError } from "../error.ts";
+import { intervalAt } from "../numeric/interval-at.ts";
 import { formatTdb } from "../time/format-tdb.ts";
 import { interpolateTable, type StateTable } from "./table-interpolation.ts";
 import { centreOf, type Track, trackOf } from "./track.ts";
@@ -71,7 +72,8 @@ export function tableTrack(given: TableGiven): Track {
     spans: [{ from, to }],
     motion,
     accuracy(tdb): Accuracy {
-      const [low, high] = intervalAt(times, tdb);
+      const at = intervalAt(times, tdb);
+      const [low, high] = [times[at] as number, times[at + 1] as number];
       let [range, rate] = [0, 0];
       for (const part of DOUBT_AT) {
         motion.doubt(low + part * (high - low), doubt);
@@ -143,17 +145,6 @@ function requireSmooth(
         `positions, or its rows lie too far apart (the distance is in doubt by ${Number((doubt[0] as number).toPrecision(2))} km).`,
     );
   }
-}
-
-function intervalAt(times: Float64Array, tdb: number): [number, number] {
-  let low = 0;
-  let high = times.length - 1;
-  while (high - low > 1) {
-    const half = (low + high) >> 1;
-    if ((times[half] as number) <= tdb) low = half;
-    else high = half;
-  }
-  return [times[low] as number, times[high] as number];
 }
 
 function medianSpacing(times: Float64Array): number {

@@ -5,6 +5,7 @@ import type { Ephemeris } from "../ephemeris/open-sources.ts";
 import type { Span } from "../ephemeris/source.ts";
 import { ApsidaryError } from "../error.ts";
 import { brentMinimum } from "../numeric/brent-minimum.ts";
+import { commonIntervals } from "../numeric/common-intervals.ts";
 import { nearWindow } from "../passages/near-window.ts";
 import type { Passage } from "../passages/passage.ts";
 import { toRow } from "../passages/to-row.ts";
@@ -17,7 +18,7 @@ import { zoneOf } from "../time/zone-of.ts";
 import { bodyInSky, LIGHT_SPEED, norm, type Place, sunInSky } from "./body-in-sky.ts";
 import { completePlanOptions, type PlanOptions, type PlanSite, siteLabel } from "./plan-options.ts";
 import type { PlanRow, WhyNoRise, WhyNoTransit, WhyNot } from "./plan-row.ts";
-import { commonStretches, type Stretch, stretchesAbove } from "./stretches.ts";
+import { type Stretch, stretchesAbove } from "./stretches.ts";
 
 /** Seconds from sample to sample of an altitude; its period is a day. */
 const STEP = 7200;
@@ -124,7 +125,7 @@ export function planner(
     const { riseUtc, transitUtc, setUtc, whyNoRise, whyNoTransit } = visit(t, stays, around(MOON_DAY), covered);
 
     const day = around(DAY_SECONDS);
-    const upInDay = minAltitudeDeg === 0 ? commonStretches(stays, [day]) : aboveLeast(day);
+    const upInDay = minAltitudeDeg === 0 ? commonIntervals(stays, [day]) : aboveLeast(day);
     const best = highest(observable(upInDay));
 
     const near = nearWindow(ephemeris, passage, within);

@@ -71,17 +71,3 @@ function reach(before: number, a: number, b: number, after: number): number {
   const second = Math.max(Math.abs(before - 2 * a + b) || 0, Math.abs(a - 2 * b + after) || 0);
   return Number.isNaN(before) || Number.isNaN(after) ? Infinity : second / 2;
 }
-
-/** Gives the stretches inside one of each list; both in order. */
-export function commonStretches(a: readonly Stretch[], b: readonly Stretch[]): Stretch[] {
-  const common: Stretch[] = [];
-  for (let i = 0, j = 0; i < a.length && j < b.length; ) {
-    const [x, y] = [a[i] as Stretch, b[j] as Stretch];
-    const from = Math.max(x.from, y.from);
-    const to = Math.min(x.to, y.to);
-    if (from < to) common.push({ from, to });
-    if (x.to < y.to) i++;
-    else j++;
-  }
-  return common;
-}

@@ -44,17 +44,24 @@ export function horizonOf(library: EngineLibrary, turn: EarthTurn, site: Site): 
   const longitude = (site.longitudeDeg * Math.PI) / 180;
   const [outX, outY] = [Math.cos(longitude), Math.sin(longitude)];
   const m = new Float64Array(9);
+  const from = new Float64Array(3);
   const degrees = 180 / Math.PI;
+  /** Writes where a body is from the site, axes of the turning Earth, to `from`. */
+  const fromSite = (tdb: number, body: Float64Array): void => {
+    turn.matrix(tdb, m);
+    const x = body[0] as number;
+    const y = body[1] as number;
+    const z = body[2] as number;
+    for (let i = 0; i < 3; i++) {
+      from[i] =
+        (m[3 * i] as number) * x + (m[3 * i + 1] as number) * y + (m[3 * i + 2] as number) * z - (place[i] as number);
+    }
+  };
   return Object.freeze({
     site: Object.freeze({ ...site }),
     look(tdb: number, body: Float64Array, out: Float64Array): void {
-      turn.matrix(tdb, m);
-      const x = body[0] as number;
-      const y = body[1] as number;
-      const z = body[2] as number;
-      const dx = (m[0] as number) * x + (m[1] as number) * y + (m[2] as number) * z - place[0];
-      const dy = (m[3] as number) * x + (m[4] as number) * y + (m[5] as number) * z - place[1];
-      const dz = (m[6] as number) * x + (m[7] as number) * y + (m[8] as number) * z - place[2];
+      fromSite(tdb, body);
+      const [dx, dy, dz] = [from[0] as number, from[1] as number, from[2] as number];
       const e = dx * east[0] + dy * east[1];
       const n = dx * north[0] + dy * north[1] + dz * north[2];
       const u = dx * up[0] + dy * up[1] + dz * up[2];
@@ -65,13 +72,8 @@ export function horizonOf(library: EngineLibrary, turn: EarthTurn, site: Site): 
       out[LOOK.hourAngle] = Math.atan2(-e, dx * outX + dy * outY) * degrees;
     },
     altitude(tdb: number, body: Float64Array): number {
-      turn.matrix(tdb, m);
-      const x = body[0] as number;
-      const y = body[1] as number;
-      const z = body[2] as number;
-      const dx = (m[0] as number) * x + (m[1] as number) * y + (m[2] as number) * z - place[0];
-      const dy = (m[3] as number) * x + (m[4] as number) * y + (m[5] as number) * z - place[1];
-      const dz = (m[6] as number) * x + (m[7] as number) * y + (m[8] as number) * z - place[2];
+      fromSite(tdb, body);
+      const [dx, dy, dz] = [from[0] as number, from[1] as number, from[2] as number];
       const u = dx * up[0] + dy * up[1] + dz * up[2];
       return Math.atan2(u, Math.sqrt(Math.max(dx * dx + dy * dy + dz * dz - u * u, 0))) * degrees;
     },

@@ -23,7 +23,7 @@ export interface TopocentricFrame {
 /** Equatorial radius of WGS 84, km. NIMA TR8350.2 (2000), table 3.1. */
 export const WGS84_RADIUS_KM = 6378.137;
 /** Flattening of WGS 84. NIMA TR8350.2 (2000), table 3.1. */
-export const WGS84_FLATTENING = 1 / 298.257223563;
+const WGS84_FLATTENING = 1 / 298.257223563;
 /** Heights that may be given, m: those for which the air's density is known. */
 const LOWEST = -500;
 const HIGHEST = 100_000;

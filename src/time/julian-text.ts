@@ -1,7 +1,7 @@
 import { dayOfGregorian, julianOfDay } from "./civil-calendar.ts";
 
 /** Modified Julian day number of 1582-10-15, the first day of the Gregorian calendar; the day before it was 1582-10-04, Julian. */
-export const FIRST_GREGORIAN_DAY = -100_840;
+const FIRST_GREGORIAN_DAY = -100_840;
 
 /**
  * Gives the same reading of a clock with its date in the Julian calendar, `1066-10-20T09:00:00.000Z` as `1066-10-14T09:00:00.000`; `null`

@@ -1,5 +1,5 @@
 import { describe, expect, test } from "vitest";
-import { commonStretches, stretchesAbove } from "../../src/planning/stretches.ts";
+import { stretchesAbove } from "../../src/planning/stretches.ts";
 
 const DAY = 86_400;
 /** Height of a wave of one day above a level, and the half-width of its part above zero: arccos of the level. */
@@ -27,20 +27,4 @@ describe("stretchesAbove", () => {
     expect(stretchesAbove(wave(1), 0, 100_000, 3600, 0.01)).toEqual([]);
     expect(stretchesAbove(wave(0), 5, 5, 3600, 0.01)).toEqual([]);
   });
-});
-
-test("commonStretches gives what lies in one stretch of each list", () => {
-  const a = [
-    { from: 0, to: 10 },
-    { from: 20, to: 30 },
-  ];
-  const b = [
-    { from: 5, to: 25 },
-    { from: 28, to: 40 },
-  ];
-  expect(commonStretches(a, b)).toEqual([
-    { from: 5, to: 10 },
-    { from: 20, to: 25 },
-    { from: 28, to: 30 },
-  ]);
 });
