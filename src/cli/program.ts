@@ -31,8 +31,9 @@ Examples:
   apsidary passages --help                             all options, and which pairs there are
 
 Answers go to standard output, everything else to standard error.
-Exit status: 0 done (no rows is an answer as well); 2 the input cannot be used, or a file cannot be
-read or written, and nothing was written; 70 a defect of the program itself.`,
+Exit status: 0 done (no rows is an answer as well); 1 audit found rows that do not agree; 2 the
+input cannot be used, or a file cannot be read or written, and nothing was written; 70 a defect of
+the program itself.`,
   );
   addPassages(program);
   addRange(program);

@@ -225,7 +225,18 @@ describe("apsidary sources and help", () => {
 
   test("explains commands, pairs, options and exit status in its help", async () => {
     const help = await answer("--help");
-    for (const word of ["passages", "range", "calendar", "sources", "Exit status", "Examples"])
+    for (const word of [
+      "passages",
+      "range",
+      "calendar",
+      "drift",
+      "audit",
+      "plan",
+      "orbit",
+      "sources",
+      "Exit status",
+      "Examples",
+    ])
       expect(help).toContain(word);
     const passages = await answer("passages", "--help");
     for (const word of ["moon-earth", "emb", "PLANET-ssb", "--next", "--leap-seconds", "Examples"]) {
